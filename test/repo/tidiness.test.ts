@@ -36,7 +36,7 @@ test("no test is skipped or alone by decree, no rule is switched off", () => {
 
 test("sources are named in kebab-case", () => {
   const offenders = FOLDERS.flatMap(sourcesUnder).filter(
-    (path) => !/\/[a-z0-9]+(-[a-z0-9]+)*\.ts$/.test(path),
+    (path) => !/\/[a-z0-9]+(-[a-z0-9]+)*(\.d)?\.ts$/.test(path),
   );
   expect(offenders).toEqual([]);
 });
