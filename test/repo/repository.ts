@@ -1,4 +1,4 @@
-import { readdirSync, readFileSync } from "node:fs";
+import { existsSync, readdirSync, readFileSync } from "node:fs";
 import { join, relative } from "node:path";
 
 export const ROOT = join(import.meta.dirname, "../..");
@@ -14,6 +14,7 @@ export function filesUnder(folder: string): string[] {
       const full = join(path, entry.name);
       return entry.isDirectory() ? walk(full) : [full];
     });
+  if (!existsSync(join(ROOT, folder))) return [];
   return walk(join(ROOT, folder)).map((path) => relative(ROOT, path).replaceAll("\\", "/"));
 }
 
