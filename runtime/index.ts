@@ -1,0 +1,10 @@
+export type { Calibration } from "./calibration.ts";
+export type { Exchange } from "./exchange.ts";
+export { initialise } from "./initialise.ts";
+export type { Mode } from "./modes.ts";
+export type { FastInput, FastOutput, SlowInput, SlowOutput } from "./ports.ts";
+export type { FastState, SlowState } from "./state.ts";
+export { stepBoost } from "./step-boost.ts";
+export { stepGuard } from "./step-guard.ts";
+export type { Structure } from "./structure.ts";
+export type { Count, Curve, Flag, Real, Table2 } from "./types.ts";

@@ -1,0 +1,170 @@
+import type { Calibration } from "./calibration.ts";
+import { lowPass } from "./low-pass.ts";
+import { debounce, movedTooFast, outsideRange, standsStill, usable } from "./plausibility.ts";
+import type { SlowState } from "./state.ts";
+import type { Structure } from "./structure.ts";
+import type { Flag, Real } from "./types.ts";
+
+/** Engine speed, rpm; the substitute while it is not usable. */
+export function conditionEngineSpeed(
+  structure: Structure,
+  calibration: Calibration,
+  state: SlowState,
+  raw: Real,
+): Real {
+  let suspect: Flag = outsideRange(calibration.engineSpeed, raw);
+  if (structure.engineSpeedRate) {
+    if (!suspect) {
+      suspect = movedTooFast(calibration.engineSpeedRate, state.engineSpeedRate, raw);
+    }
+  }
+  debounce(calibration.engineSpeed, state.engineSpeed, raw, suspect);
+  let value: Real = calibration.engineSpeedOtherwiseRpm;
+  if (usable(state.engineSpeed)) {
+    value = state.engineSpeed.lastGood;
+  }
+  if (structure.engineSpeedFilter) {
+    value = lowPass(state.engineSpeedFilter, value, calibration.engineSpeedFilterS, structure.stepS);
+  }
+  return value;
+}
+
+/** Accelerator, 0..1; the substitute while it is not usable. */
+export function conditionAccelerator(
+  structure: Structure,
+  calibration: Calibration,
+  state: SlowState,
+  raw: Real,
+): Real {
+  let suspect: Flag = outsideRange(calibration.accelerator, raw);
+  if (structure.acceleratorRate) {
+    if (!suspect) {
+      suspect = movedTooFast(calibration.acceleratorRate, state.acceleratorRate, raw);
+    }
+  }
+  debounce(calibration.accelerator, state.accelerator, raw, suspect);
+  let value: Real = calibration.acceleratorOtherwiseRatio;
+  if (usable(state.accelerator)) {
+    value = state.accelerator.lastGood;
+  }
+  if (structure.acceleratorFilter) {
+    value = lowPass(state.acceleratorFilter, value, calibration.acceleratorFilterS, structure.stepS);
+  }
+  return value;
+}
+
+/**
+ * Boost pressure, kPa; the last good sample while it is doubted (the mode decides what happens once it has failed).
+ * A frozen sensor is recognised by the target having moved meanwhile.
+ */
+export function conditionBoostPressure(
+  structure: Structure,
+  calibration: Calibration,
+  state: SlowState,
+  raw: Real,
+): Real {
+  let suspect: Flag = outsideRange(calibration.boostPressure, raw);
+  if (structure.boostPressureRate) {
+    if (!suspect) {
+      suspect = movedTooFast(calibration.boostPressureRate, state.boostPressureRate, raw);
+    }
+  }
+  if (structure.boostPressureStuck) {
+    if (!suspect) {
+      suspect = standsStill(calibration.boostPressureStuck, state.boostPressureStuck, raw, state.targetKpa);
+    }
+  }
+  debounce(calibration.boostPressure, state.boostPressure, raw, suspect);
+  let value: Real = calibration.boostPressure.low;
+  if (state.boostPressure.hasGood) {
+    value = state.boostPressure.lastGood;
+  }
+  if (structure.boostPressureFilter) {
+    if (state.boostPressure.hasGood) {
+      value = lowPass(state.boostPressureFilter, value, calibration.boostPressureFilterS, structure.stepS);
+    }
+  }
+  return value;
+}
+
+/** Ambient pressure, kPa; the substitute while it is not usable. */
+export function conditionAmbientPressure(
+  structure: Structure,
+  calibration: Calibration,
+  state: SlowState,
+  raw: Real,
+): Real {
+  let suspect: Flag = outsideRange(calibration.ambientPressure, raw);
+  if (structure.ambientPressureRate) {
+    if (!suspect) {
+      suspect = movedTooFast(calibration.ambientPressureRate, state.ambientPressureRate, raw);
+    }
+  }
+  debounce(calibration.ambientPressure, state.ambientPressure, raw, suspect);
+  let value: Real = calibration.ambientPressureOtherwiseKpa;
+  if (usable(state.ambientPressure)) {
+    value = state.ambientPressure.lastGood;
+  }
+  if (structure.ambientPressureFilter) {
+    value = lowPass(state.ambientPressureFilter, value, calibration.ambientPressureFilterS, structure.stepS);
+  }
+  return value;
+}
+
+/** Charge temperature, K; the reference temperature, that is no compensation, while it is not usable. */
+export function conditionChargeTemperature(
+  structure: Structure,
+  calibration: Calibration,
+  state: SlowState,
+  raw: Real,
+): Real {
+  let suspect: Flag = outsideRange(calibration.chargeTemperature, raw);
+  if (structure.chargeTemperatureRate) {
+    if (!suspect) {
+      suspect = movedTooFast(calibration.chargeTemperatureRate, state.chargeTemperatureRate, raw);
+    }
+  }
+  debounce(calibration.chargeTemperature, state.chargeTemperature, raw, suspect);
+  let value: Real = calibration.airReferenceTemperatureK;
+  if (usable(state.chargeTemperature)) {
+    value = state.chargeTemperature.lastGood;
+  }
+  if (structure.chargeTemperatureFilter) {
+    value = lowPass(
+      state.chargeTemperatureFilter,
+      value,
+      calibration.chargeTemperatureFilterS,
+      structure.stepS,
+    );
+  }
+  return value;
+}
+
+/** Boost ceiling asked for by other functions, kPa; the substitute while it is not usable. */
+export function conditionBoostCeilingRequest(
+  structure: Structure,
+  calibration: Calibration,
+  state: SlowState,
+  raw: Real,
+): Real {
+  let suspect: Flag = outsideRange(calibration.boostCeilingRequest, raw);
+  if (structure.boostCeilingRequestRate) {
+    if (!suspect) {
+      suspect = movedTooFast(calibration.boostCeilingRequestRate, state.boostCeilingRequestRate, raw);
+    }
+  }
+  debounce(calibration.boostCeilingRequest, state.boostCeilingRequest, raw, suspect);
+  let value: Real = calibration.boostCeilingRequestOtherwiseKpa;
+  if (usable(state.boostCeilingRequest)) {
+    value = state.boostCeilingRequest.lastGood;
+  }
+  if (structure.boostCeilingRequestFilter) {
+    value = lowPass(
+      state.boostCeilingRequestFilter,
+      value,
+      calibration.boostCeilingRequestFilterS,
+      structure.stepS,
+    );
+  }
+  return value;
+}

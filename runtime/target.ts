@@ -1,0 +1,66 @@
+import type { Calibration } from "./calibration.ts";
+import { interpolateTable } from "./interpolate.ts";
+import { clamp, min } from "./intrinsics.ts";
+import type { Structure } from "./structure.ts";
+import type { Real } from "./types.ts";
+
+/**
+ * Factor on the wanted pressure that holds the air mass when the charge is hot, within 1 .. 1 + at most.
+ *   factor = 1 + strength (Tcharge / Tref - 1), times pref / pamb for gauge and ratio targets only, since the air mass
+ *   at a fixed absolute pressure does not depend on the weather's pressure. Ideal gas law.
+ */
+export function airFactor(
+  structure: Structure,
+  calibration: Calibration,
+  chargeTemperatureK: Real,
+  ambientKpa: Real,
+): Real {
+  let factor: Real =
+    1 + calibration.airStrengthRatio * (chargeTemperatureK / calibration.airReferenceTemperatureK - 1);
+  if (structure.targetReference !== "absolute") {
+    factor = factor * (calibration.airReferencePressureKpa / ambientKpa);
+  }
+  return clamp(factor, 1, 1 + calibration.airAtMostRatio);
+}
+
+/** Pressure the driver asks for, kPa abs: table over accelerator and engine speed, in the table's own reference. */
+export function requestedBoost(
+  structure: Structure,
+  calibration: Calibration,
+  acceleratorRatio: Real,
+  engineSpeedRpm: Real,
+  ambientKpa: Real,
+): Real {
+  const fromTable = interpolateTable(
+    calibration.targetBoost.rows,
+    calibration.targetBoost.columns,
+    calibration.targetBoost.values,
+    acceleratorRatio,
+    engineSpeedRpm,
+  );
+  let absolute: Real = fromTable;
+  if (structure.targetReference === "gauge") {
+    absolute = ambientKpa + fromTable;
+  }
+  if (structure.targetReference === "pressure_ratio") {
+    absolute = ambientKpa * fromTable;
+  }
+  return absolute;
+}
+
+/** The lowest of the ceilings, kPa abs. `lowestAmbientKpa` is the safe side: a lost ambient sensor lowers the ceiling. */
+export function boostCeiling(
+  structure: Structure,
+  calibration: Calibration,
+  lowestAmbientKpa: Real,
+  ceilingRequestKpa: Real,
+): Real {
+  let ceiling: Real = calibration.boostCeilingKpa;
+  if (structure.pressureRatioCeiling) {
+    ceiling = min(ceiling, calibration.pressureRatioCeiling * lowestAmbientKpa);
+  }
+  if (structure.boostCeilingRequest) {
+    ceiling = min(ceiling, ceilingRequestKpa);
+  }
+  return ceiling;
+}
