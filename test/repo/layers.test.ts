@@ -13,8 +13,9 @@ const ALLOWED: Record<(typeof FOLDERS)[number], { ours: string[]; packages: stri
   cli: { ours: ["spec", "runtime", "generator", "hil-sim", "verification"], packages: "any" },
 };
 
-const IMPORT = /\b(?:from|import)\s*\(?\s*"([^"]+)"/g;
-const importsOf = (path: string): string[] => [...textOf(path).matchAll(IMPORT)].map((found) => found[1]);
+const IMPORT = /^(?:import|export)\s[^;"]*?from\s+"([^"]+)"|^import\s+"([^"]+)"|\bimport\("([^"]+)"\)/gm;
+const importsOf = (path: string): string[] =>
+  [...textOf(path).matchAll(IMPORT)].map((found) => found[1] ?? found[2] ?? found[3]);
 
 const topFolder = (path: string): string => path.split("/")[0];
 

@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { FOLDERS, sourcesUnder, textOf } from "./repository.ts";
+import { FOLDERS, sourcesUnder, textOf, withoutComments } from "./repository.ts";
 
 /** The places that may touch the machine. */
 const MAY_TOUCH = [/^cli\//, /^verification\/([a-z-]+\/)?(worker|evidence-store)[a-z-]*\.ts$/];
@@ -15,9 +15,6 @@ const IMPURE: readonly (readonly [string, RegExp])[] = [
   ["the console", /\bconsole\./],
   ["code from text", /\beval\(|\bnew Function\b|"node:vm"/],
 ];
-
-const withoutComments = (text: string): string =>
-  text.replace(/\/\*[\s\S]*?\*\//g, "").replace(/^\s*\/\/.*$/gm, "");
 
 const pureSources = (): string[] =>
   FOLDERS.flatMap(sourcesUnder).filter((path) => !MAY_TOUCH.some((place) => place.test(path)));

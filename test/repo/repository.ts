@@ -22,3 +22,6 @@ export const textOf = (path: string): string => readFileSync(join(ROOT, path), "
 
 export const sourcesUnder = (folder: string): string[] =>
   filesUnder(folder).filter((path) => path.endsWith(".ts"));
+
+export const withoutComments = (text: string): string =>
+  text.replace(/\/\*[\s\S]*?\*\//g, "").replace(/^\s*\/\/.*$/gm, "");
