@@ -1,0 +1,79 @@
+import type { LoopSpec } from "../../spec/loop-spec.ts";
+import type { Entry, Lowered, StructRole } from "../lowered.ts";
+import { putGuard } from "./guard.ts";
+import { putActuator, putFeedback, putFeedforward, putTarget } from "./loop.ts";
+import { emptySheet, type Sheet } from "./sheet.ts";
+import { putSignals } from "./signals.ts";
+import { structureOf } from "./structure.ts";
+
+export const CAUTIONS: readonly string[] = [
+  "Prototype code, not a certified product: test it on the target and on a bench before any engine.",
+  "Keep an independent mechanical or electrical overspeed and overboost protection.",
+  "Local rules and a qualified engineer decide whether and how this may run.",
+];
+
+const ENTRIES: readonly Entry[] = [
+  {
+    function: "initialise",
+    printed: "init",
+    kind: "init",
+    when: "Call once before the first step, and to start over.",
+  },
+  {
+    function: "stepBoost",
+    kind: "step",
+    when: "The slow step: call it once per period; the fast step goes first when both fall together.",
+  },
+  {
+    function: "stepGuard",
+    kind: "step",
+    when: "The fast step: call it once per period; it may interrupt the slow step anywhere.",
+  },
+];
+
+const ROLES: Readonly<Record<string, StructRole>> = {
+  Calibration: "calibration",
+  SlowState: "state",
+  FastState: "state",
+  Exchange: "exchange",
+  SlowInput: "input",
+  FastInput: "input",
+  SlowOutput: "output",
+  FastOutput: "output",
+};
+
+function calibrationSheet(spec: LoopSpec): Sheet {
+  const sheet = emptySheet();
+  putSignals(sheet, spec.controller);
+  putTarget(sheet, spec.controller);
+  putFeedforward(sheet, spec.controller);
+  putFeedback(sheet, spec.controller);
+  putActuator(sheet, spec.controller);
+  putGuard(sheet, spec.controller);
+  return sheet;
+}
+
+/**
+ * A checked spec made ready for code: structure, calibration values and what is known of each.
+ * `meaning` is the canonical text of the controller (spec/meaning), hashed for the banner.
+ */
+export function lowerSpec(spec: LoopSpec, meaning: string): Lowered {
+  const { controller } = spec;
+  const sheet = calibrationSheet(spec);
+  const structure = structureOf(controller);
+  return {
+    name: controller.name,
+    description: controller.description,
+    source: spec.file.split("/").pop() ?? spec.file,
+    precision: controller.precision,
+    structure: { ...structure },
+    structureUnits: { stepS: "s", guardStepS: "s", accelerationSteps: "fast steps" },
+    entries: ENTRIES,
+    roles: ROLES,
+    arraySizes: { ...sheet.sizes, "FastState.speedHistoryRpm": structure.accelerationSteps },
+    calibration: sheet.values,
+    calibrationInfo: sheet.info,
+    meaning,
+    cautions: CAUTIONS,
+  };
+}
