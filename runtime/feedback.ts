@@ -1,7 +1,11 @@
 import type { Calibration } from "./calibration.ts";
-import { abs, clamp, max } from "./intrinsics.ts";
+import { feedforwardFor } from "./feedforward.ts";
+import { derivativeGainAt, proportionalGainAt, scheduleSignal } from "./gains.ts";
+import { max } from "./intrinsics.ts";
+import type { SlowOutput } from "./ports.ts";
+import type { Measured, SlowState } from "./state.ts";
 import type { Structure } from "./structure.ts";
-import type { Flag, Real } from "./types.ts";
+import type { Real } from "./types.ts";
 
 /** Smallest gauge target that the gain schedule divides by, kPa. */
 export const LEAST_GAUGE_KPA: Real = 25;
@@ -24,21 +28,13 @@ export function normalise(structure: Structure, value: Real, gaugeKpa: Real): Re
 }
 
 /**
- * Proportional term with set-point weight b, on gauge pressures.
+ * Error with set-point weight b on gauge pressures, kPa; the proportional term is the gain times it.
  *   P = K ((p - pamb) - b (r - pamb)); more opening lowers the boost, so the error is measured minus target.
  * source: Astrom & Hagglund, Advanced PID Control, 2006, two-degree-of-freedom PID (from memory)
  */
-export function proportionalTerm(
-  structure: Structure,
-  gain: Real,
-  setpointWeight: Real,
-  pressureKpa: Real,
-  targetKpa: Real,
-  ambientKpa: Real,
-  gaugeKpa: Real,
-): Real {
-  const weighted = pressureKpa - ambientKpa - setpointWeight * (targetKpa - ambientKpa);
-  return gain * normalise(structure, weighted, gaugeKpa);
+export function weightedError(calibration: Calibration, measured: Measured, targetKpa: Real): Real {
+  const gauge = measured.boostPressureKpa - measured.ambientPressureKpa;
+  return gauge - calibration.setpointWeightRatio * (targetKpa - measured.ambientPressureKpa);
 }
 
 /**
@@ -56,48 +52,55 @@ export function filteredRate(
   return (filterS * previousRate + (pressureKpa - previousKpa)) / (filterS + stepS);
 }
 
-/**
- * Conditional integration: integrate only while the output is not saturated in the error's direction, the guard does
- * not hold the gate, and the error is inside the band or the pressure nearly stands still.
- * source: Astrom & Hagglund, Advanced PID Control, 2006, conditional integration (from memory)
- */
-export function mayIntegrate(
-  calibration: Calibration,
-  error: Real,
-  rate: Real,
-  saturatedClosed: Flag,
-  saturatedOpen: Flag,
-  guardActive: Flag,
-): Flag {
-  const drivesFurther = (saturatedOpen && error > 0) || (saturatedClosed && error < 0);
-  const near = abs(error) < calibration.windupBand || abs(rate) < calibration.windupStillBelow;
-  return !drivesFurther && !guardActive && near;
+/** Rate of the measured pressure, kPa/s; zero in the first step. */
+export function pressureRate(structure: Structure, calibration: Calibration, state: SlowState): Real {
+  const pressure = state.measured.boostPressureKpa;
+  let previous: Real = state.previousPressureKpa;
+  if (state.mode === "start") {
+    previous = pressure;
+  }
+  state.pressureRateKpaPerS = filteredRate(
+    state.pressureRateKpaPerS,
+    previous,
+    pressure,
+    calibration.derivativeFilterS,
+    structure.stepS,
+  );
+  state.previousPressureKpa = pressure;
+  return state.pressureRateKpaPerS;
 }
 
-/**
- * Next integral term, kept within the trim limits.
- *   conditional        I += Ki e dt, when allowed
- *   back calculation   I += (Ki e + (applied - unlimited) / Tt) dt
- *   none               I += Ki e dt
- * source: Astrom & Hagglund, Advanced PID Control, 2006, back-calculation (from memory)
- */
-export function nextIntegral(
+/** Feedforward, P, I and D for a target, each written to the output; returns their sum in the feedback coordinate. */
+export function sumOfTerms(
   structure: Structure,
   calibration: Calibration,
-  integral: Real,
-  integralRate: Real,
-  allowed: Flag,
-  unlimited: Real,
-  applied: Real,
+  state: SlowState,
+  targetKpa: Real,
+  output: SlowOutput,
 ): Real {
-  let rate: Real = integralRate;
-  if (structure.antiWindup === "conditional") {
-    if (!allowed) {
-      rate = 0;
+  const ambient = state.measured.ambientPressureKpa;
+  const engineSpeed = state.measured.engineSpeedRpm;
+  const schedule = scheduleSignal(structure, engineSpeed, targetKpa);
+  const gauge = scheduledGauge(targetKpa, ambient);
+  const gain = proportionalGainAt(structure, calibration, schedule);
+  const weighted = weightedError(calibration, state.measured, targetKpa);
+  const feedforward = feedforwardFor(structure, calibration, targetKpa, ambient, engineSpeed);
+  const proportional = gain * normalise(structure, weighted, gauge);
+  output.feedforwardTerm = feedforward;
+  output.proportionalTerm = proportional;
+  let sum: Real = feedforward + proportional;
+  if (structure.integral) {
+    output.integralTerm = state.integralTerm;
+    sum = sum + state.integralTerm;
+  }
+  if (structure.derivative || structure.antiWindup === "conditional") {
+    const rate = pressureRate(structure, calibration, state);
+    if (structure.derivative) {
+      const derivative =
+        derivativeGainAt(structure, calibration, schedule) * normalise(structure, rate, gauge);
+      output.derivativeTerm = derivative;
+      sum = sum + derivative;
     }
   }
-  if (structure.antiWindup === "back_calculation") {
-    rate = rate + (applied - unlimited) / calibration.trackingTimeS;
-  }
-  return clamp(integral + rate * structure.stepS, calibration.trimLow, calibration.trimHigh);
+  return sum;
 }

@@ -2,7 +2,7 @@ import type { Calibration } from "./calibration.ts";
 import type { Exchange } from "./exchange.ts";
 import type { LowPassState } from "./low-pass.ts";
 import type { RateCheckState, SignalState, StuckCheckState } from "./plausibility.ts";
-import type { FastState, SlowState } from "./state.ts";
+import type { FastState, Measured, SlowState } from "./state.ts";
 import type { Structure } from "./structure.ts";
 
 function initialiseSignal(state: SignalState): void {
@@ -87,9 +87,26 @@ function initialiseOptionalSignals(structure: Structure, state: SlowState): void
   }
 }
 
+function initialiseMeasured(structure: Structure, measured: Measured): void {
+  measured.engineSpeedRpm = 0;
+  measured.acceleratorRatio = 0;
+  measured.boostPressureKpa = 0;
+  measured.ambientPressureKpa = 0;
+  if (structure.pressureRatioCeiling) {
+    measured.lowestAmbientKpa = 0;
+  }
+  if (structure.airCompensation) {
+    measured.chargeTemperatureK = 0;
+  }
+  if (structure.boostCeilingRequest) {
+    measured.boostCeilingRequestKpa = 0;
+  }
+}
+
 function initialiseSlow(structure: Structure, calibration: Calibration, state: SlowState): void {
   initialiseSlowSignals(structure, state);
   initialiseOptionalSignals(structure, state);
+  initialiseMeasured(structure, state.measured);
   state.mode = "start";
   state.targetKpa = 0;
   if (structure.integral) {
@@ -100,6 +117,26 @@ function initialiseSlow(structure: Structure, calibration: Calibration, state: S
     state.pressureRateKpaPerS = 0;
   }
   state.openingRatio = calibration.safeOpeningRatio;
+}
+
+function initialiseFloor(structure: Structure, state: FastState): void {
+  if (structure.turboSpeedFilter) {
+    initialiseLowPass(state.turboSpeedFilter);
+  }
+  for (let i = 0; i < structure.accelerationSteps; i++) {
+    state.speedHistoryRpm[i] = 0;
+  }
+  state.speedHistoryNext = 0;
+  state.speedHistoryFilled = false;
+  state.guardIntegralTerm = 0;
+  state.targetReductionKpa = 0;
+}
+
+function initialiseTrip(state: FastState): void {
+  state.tripped = false;
+  state.aboveCeilingSteps = 0;
+  state.belowReleaseSteps = 0;
+  state.trippedSteps = 0;
 }
 
 function initialiseFast(structure: Structure, state: FastState): void {
@@ -113,22 +150,10 @@ function initialiseFast(structure: Structure, state: FastState): void {
       initialiseStuckCheck(state.turboSpeedStuck);
     }
     if (structure.proportionalGuard) {
-      if (structure.turboSpeedFilter) {
-        initialiseLowPass(state.turboSpeedFilter);
-      }
-      for (let i = 0; i < structure.accelerationSteps; i++) {
-        state.speedHistoryRpm[i] = 0;
-      }
-      state.speedHistoryNext = 0;
-      state.speedHistoryFilled = false;
-      state.guardIntegralTerm = 0;
-      state.targetReductionKpa = 0;
+      initialiseFloor(structure, state);
     }
     if (structure.trip) {
-      state.tripped = false;
-      state.aboveCeilingSteps = 0;
-      state.belowReleaseSteps = 0;
-      state.trippedSteps = 0;
+      initialiseTrip(state);
     }
   }
 }

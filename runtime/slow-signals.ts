@@ -1,6 +1,7 @@
 import type { Calibration } from "./calibration.ts";
 import { lowPass } from "./low-pass.ts";
 import { debounce, movedTooFast, outsideRange, standsStill, usable } from "./plausibility.ts";
+import type { SlowInput } from "./ports.ts";
 import type { SlowState } from "./state.ts";
 import type { Structure } from "./structure.ts";
 import type { Flag, Real } from "./types.ts";
@@ -167,4 +168,42 @@ export function conditionBoostCeilingRequest(
     );
   }
   return value;
+}
+
+/** Conditions every signal of the slow step into `state.measured`. */
+export function conditionSlowSignals(
+  structure: Structure,
+  calibration: Calibration,
+  state: SlowState,
+  input: SlowInput,
+): void {
+  state.measured.engineSpeedRpm = conditionEngineSpeed(structure, calibration, state, input.engineSpeedRpm);
+  state.measured.acceleratorRatio = conditionAccelerator(
+    structure,
+    calibration,
+    state,
+    input.acceleratorRatio,
+  );
+  state.measured.boostPressureKpa = conditionBoostPressure(
+    structure,
+    calibration,
+    state,
+    input.boostPressureKpa,
+  );
+  const ambient = conditionAmbientPressure(structure, calibration, state, input.ambientPressureKpa);
+  state.measured.ambientPressureKpa = ambient;
+  if (structure.pressureRatioCeiling) {
+    state.measured.lowestAmbientKpa = ambient;
+    if (state.ambientPressure.failed) {
+      state.measured.lowestAmbientKpa = calibration.ambientPressure.low;
+    }
+  }
+  if (structure.airCompensation) {
+    const charge = conditionChargeTemperature(structure, calibration, state, input.chargeTemperatureK);
+    state.measured.chargeTemperatureK = charge;
+  }
+  if (structure.boostCeilingRequest) {
+    const request = conditionBoostCeilingRequest(structure, calibration, state, input.boostCeilingRequestKpa);
+    state.measured.boostCeilingRequestKpa = request;
+  }
 }

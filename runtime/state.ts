@@ -3,8 +3,21 @@ import type { Mode } from "./modes.ts";
 import type { RateCheckState, SignalState, StuckCheckState } from "./plausibility.ts";
 import type { Count, Flag, Real } from "./types.ts";
 
+/** This step's conditioned signals. */
+export interface Measured {
+  engineSpeedRpm: Real;
+  acceleratorRatio: Real;
+  boostPressureKpa: Real;
+  ambientPressureKpa: Real;
+  /** The safe side for ceilings: the lowest believable pressure while the sensor has failed. */
+  lowestAmbientKpa: Real;
+  chargeTemperatureK: Real;
+  boostCeilingRequestKpa: Real;
+}
+
 /** What the slow step remembers. */
 export interface SlowState {
+  measured: Measured;
   engineSpeed: SignalState;
   engineSpeedRate: RateCheckState;
   engineSpeedFilter: LowPassState;

@@ -1,6 +1,8 @@
 import type { Calibration } from "./calibration.ts";
 import { interpolateTable } from "./interpolate.ts";
 import { clamp, min } from "./intrinsics.ts";
+import { rateLimit } from "./rate-limit.ts";
+import type { Measured, SlowState } from "./state.ts";
 import type { Structure } from "./structure.ts";
 import type { Real } from "./types.ts";
 
@@ -24,43 +26,58 @@ export function airFactor(
 }
 
 /** Pressure the driver asks for, kPa abs: table over accelerator and engine speed, in the table's own reference. */
-export function requestedBoost(
-  structure: Structure,
-  calibration: Calibration,
-  acceleratorRatio: Real,
-  engineSpeedRpm: Real,
-  ambientKpa: Real,
-): Real {
+export function requestedBoost(structure: Structure, calibration: Calibration, measured: Measured): Real {
   const fromTable = interpolateTable(
     calibration.targetBoost.rows,
     calibration.targetBoost.columns,
     calibration.targetBoost.values,
-    acceleratorRatio,
-    engineSpeedRpm,
+    measured.acceleratorRatio,
+    measured.engineSpeedRpm,
   );
   let absolute: Real = fromTable;
   if (structure.targetReference === "gauge") {
-    absolute = ambientKpa + fromTable;
+    absolute = measured.ambientPressureKpa + fromTable;
   }
   if (structure.targetReference === "pressure_ratio") {
-    absolute = ambientKpa * fromTable;
+    absolute = measured.ambientPressureKpa * fromTable;
+  }
+  if (structure.airCompensation) {
+    absolute =
+      absolute * airFactor(structure, calibration, measured.chargeTemperatureK, measured.ambientPressureKpa);
   }
   return absolute;
 }
 
-/** The lowest of the ceilings, kPa abs. `lowestAmbientKpa` is the safe side: a lost ambient sensor lowers the ceiling. */
-export function boostCeiling(
-  structure: Structure,
-  calibration: Calibration,
-  lowestAmbientKpa: Real,
-  ceilingRequestKpa: Real,
-): Real {
+/** The lowest of the ceilings, kPa abs. */
+export function boostCeiling(structure: Structure, calibration: Calibration, measured: Measured): Real {
   let ceiling: Real = calibration.boostCeilingKpa;
   if (structure.pressureRatioCeiling) {
-    ceiling = min(ceiling, calibration.pressureRatioCeiling * lowestAmbientKpa);
+    ceiling = min(ceiling, calibration.pressureRatioCeiling * measured.lowestAmbientKpa);
   }
   if (structure.boostCeilingRequest) {
-    ceiling = min(ceiling, ceilingRequestKpa);
+    ceiling = min(ceiling, measured.boostCeilingRequestKpa);
   }
   return ceiling;
+}
+
+/** The target that the loop follows, kPa abs: wanted less the guard's reduction, slewed; starts at the boost there is. */
+export function followTarget(
+  structure: Structure,
+  calibration: Calibration,
+  state: SlowState,
+  wantedKpa: Real,
+  reductionKpa: Real,
+): Real {
+  let previous: Real = state.targetKpa;
+  if (state.mode === "start") {
+    previous = state.measured.boostPressureKpa;
+  }
+  state.targetKpa = rateLimit(
+    previous,
+    wantedKpa - reductionKpa,
+    calibration.targetRiseKpaPerS,
+    calibration.targetFallKpaPerS,
+    structure.stepS,
+  );
+  return state.targetKpa;
 }

@@ -1,6 +1,7 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { filteredRate, mayIntegrate, nextIntegral } from "../../runtime/feedback.ts";
+import { filteredRate } from "../../runtime/feedback.ts";
+import { mayIntegrate, nextIntegral } from "../../runtime/integral.ts";
 import { blend, interpolateCurve, interpolateTable, locate } from "../../runtime/interpolate.ts";
 import { clamp, max, min, same, toCount } from "../../runtime/intrinsics.ts";
 import { lowPass } from "../../runtime/low-pass.ts";

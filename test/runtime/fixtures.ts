@@ -140,6 +140,15 @@ const filterState = () => ({ value: 0, primed: false });
 
 export function slowState(): SlowState {
   return {
+    measured: {
+      engineSpeedRpm: 0,
+      acceleratorRatio: 0,
+      boostPressureKpa: 0,
+      ambientPressureKpa: 0,
+      lowestAmbientKpa: 0,
+      chargeTemperatureK: 0,
+      boostCeilingRequestKpa: 0,
+    },
     engineSpeed: signalState(),
     engineSpeedRate: rateState(),
     engineSpeedFilter: filterState(),
