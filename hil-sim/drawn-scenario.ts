@@ -29,6 +29,8 @@ export interface DrawnScenario {
   /** kPa abs. */
   readonly target?: FixedCourse;
   readonly ceilings: boolean;
+  /** Boost kPa abs that the run starts at in equilibrium; a target course's first value goes before it, without either the gate rests. */
+  readonly startBoostKpa?: number;
   /** K, m. */
   readonly ambient: { readonly temperature: number; readonly altitude: number };
   /** Multiplies every sensor's noise; 0 switches noise off. */

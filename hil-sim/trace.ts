@@ -10,3 +10,19 @@ export interface Trace {
   /** Index into MODES, if asked for. */
   readonly mode?: Uint8Array;
 }
+
+/** Memory for runs of up to `seconds`, of the named signals only. */
+export function newTrace(signals: readonly TraceSignal[], seconds: number, withMode = false): Trace {
+  const samples = Math.floor(seconds * 1000 + 0.5) + 1;
+  const arrays: Trace["signals"] = {};
+  for (const signal of signals) arrays[signal] = new Float64Array(samples);
+  const trace = { step: 1e-3, length: 0, signals: arrays };
+  return withMode ? { ...trace, mode: new Uint8Array(samples) } : trace;
+}
+
+/** Samples that fit. */
+export function traceCapacity(trace: Trace): number {
+  let least = trace.mode?.length ?? Number.MAX_SAFE_INTEGER;
+  for (const samples of Object.values(trace.signals)) least = Math.min(least, samples.length);
+  return least;
+}

@@ -1,0 +1,29 @@
+export {
+  type ControllerInput,
+  type ControllerOutput,
+  type ControllerPort,
+  MODES,
+} from "./controller-port.ts";
+export type { DrawnScenario, FixedCourse, FixedFault, FixedPoint } from "./drawn-scenario.ts";
+export { exponential, naturalLog, powerOf, standardPressure } from "./exact-math.ts";
+export { FAULT_KINDS, type FaultKindName } from "./faults.ts";
+export { type LoopPlant, type LoopStart, type RunSummary, runLoop } from "./loop/run-loop.ts";
+export { startOfRun, startPoint } from "./loop/start-of-run.ts";
+export { newPlantFaults, type PlantFaults } from "./plant/plant-input.ts";
+export {
+  copyPlantParameters,
+  type ParameterName,
+  type PlantParameters,
+  plantParameters,
+} from "./plant/plant-parameters.ts";
+export type { PlantState } from "./plant/plant-state.ts";
+export { nextBits, nextNormal, nextUniform, type RandomState, randomStream } from "./random.ts";
+export { type Equilibrium, equilibriumAt, equilibriumHolding } from "./steady/equilibrium.ts";
+export {
+  type OpeningForBoost,
+  openingForBoost,
+  type ReachableBoost,
+  reachableBoost,
+} from "./steady/opening-for-boost.ts";
+export type { OperatingPoint } from "./steady/operating-point.ts";
+export { newTrace, type Trace, traceCapacity } from "./trace.ts";

@@ -1,0 +1,158 @@
+// Sensors: first-order lag, noise, bias, range and steps of the converter; turbo speed from counted pulses.
+//   updated exactly every millisecond, outside the plant's differential equations
+// (43) lag += (p - lag)(1 - e^(-h/tau));  reading = steps(lag + bias + noise), limited to the range
+// (44) phase += om/(2 pi) pulses h;  speed = whole phases passed over a sliding window, per window
+// (45) temperatures: lag as (43), steps of stated size
+// limits: tau 0 follows at once; a window of w seconds and n pulses reads in steps of 60/(n w) rpm
+// source: common practice for lag and converter; counting: definition
+import type { PlantSpec, PressureSensorSpec } from "../spec/plant-spec.ts";
+import { exponential } from "./exact-math.ts";
+import type { PlantState } from "./plant/plant-state.ts";
+import { nextNormal, type RandomState } from "./random.ts";
+
+const RPM_PER_RADIAN = 9.549296585513721;
+const REVOLUTIONS_PER_RADIAN = 0.15915494309189535;
+
+interface PressureSensor {
+  lagKpa: number;
+  /** Share of the distance covered in 1 ms. */
+  readonly follows: number;
+  readonly noiseKpa: number;
+  readonly biasKpa: number;
+  readonly lowKpa: number;
+  readonly highKpa: number;
+  readonly stepKpa: number;
+  readingKpa: number;
+}
+
+interface TemperatureSensor {
+  lag: number;
+  readonly follows: number;
+  readonly step: number;
+  reading: number;
+}
+
+interface SpeedCounter {
+  phase: number;
+  /** Whole phases at each of the last milliseconds; as long as the window. */
+  readonly counts: Float64Array;
+  next: number;
+  readonly pulsesPerMillisecondAndRadian: number;
+  readonly rpmPerCount: number;
+  readingRpm: number;
+}
+
+/** All sensors of a plant with what they remember. */
+export interface Sensors {
+  readonly boost: PressureSensor;
+  readonly manifold: PressureSensor;
+  readonly ambient: PressureSensor;
+  readonly charge: TemperatureSensor;
+  readonly inlet: TemperatureSensor;
+  readonly turboSpeed: SpeedCounter;
+  readonly engineSpeedStep: number;
+  engineSpeedRpm: number;
+}
+
+/** Sensors settled at a steady plant: `noise` multiplies every standard deviation. */
+export function settledSensors(
+  spec: PlantSpec["sensors"],
+  state: PlantState,
+  ambientPressure: number,
+  noise: number,
+  random: RandomState,
+): Sensors {
+  const sensors: Sensors = {
+    boost: pressureSensor(spec.boostPressure, state.boostPressure, noise),
+    manifold: pressureSensor(spec.manifoldPressure, state.intakePressure, noise),
+    ambient: pressureSensor(spec.ambientPressure, ambientPressure, noise),
+    charge: temperatureSensor(spec.chargeTemperature, state.boostTemperature),
+    inlet: temperatureSensor(spec.inletTemperature, state.inletTemperature),
+    turboSpeed: speedCounter(spec.turboSpeed),
+    engineSpeedStep: spec.engineSpeed.step * RPM_PER_RADIAN,
+    engineSpeedRpm: 0.5,
+  };
+  for (let i = 0; i < sensors.turboSpeed.counts.length; i++)
+    countPulses(sensors.turboSpeed, state.turboSpeed);
+  updateSensors(sensors, state, ambientPressure, random);
+  return sensors;
+}
+
+function pressureSensor(spec: PressureSensorSpec, pressure: number, noise: number): PressureSensor {
+  const steps = Math.max(1, Math.imul(1, 1 << Math.min(spec.bits, 30)) - 1);
+  return {
+    lagKpa: pressure / 1000,
+    follows: followsIn(spec.timeConstant),
+    noiseKpa: (spec.noise * noise) / 1000,
+    biasKpa: spec.bias / 1000,
+    lowKpa: spec.range[0] / 1000,
+    highKpa: spec.range[1] / 1000,
+    stepKpa: (spec.range[1] - spec.range[0]) / 1000 / steps,
+    readingKpa: 0.5,
+  };
+}
+
+function temperatureSensor(
+  spec: { readonly timeConstant: number; readonly step: number },
+  temperature: number,
+): TemperatureSensor {
+  return { lag: temperature, follows: followsIn(spec.timeConstant), step: spec.step, reading: 0.5 };
+}
+
+function speedCounter(spec: PlantSpec["sensors"]["turboSpeed"]): SpeedCounter {
+  const window = Math.max(1, Math.floor(spec.window * 1000 + 0.5));
+  return {
+    phase: 0.5,
+    counts: new Float64Array(window),
+    next: 0,
+    pulsesPerMillisecondAndRadian: REVOLUTIONS_PER_RADIAN * spec.pulsesPerRevolution * 1e-3,
+    rpmPerCount: 60 / (spec.pulsesPerRevolution * window * 1e-3),
+    readingRpm: 0.5,
+  };
+}
+
+function followsIn(timeConstant: number): number {
+  return timeConstant <= 0 ? 1 : 1 - exponential(-1e-3 / timeConstant);
+}
+
+/** Takes in the plant after a millisecond. */
+export function updateSensors(
+  sensors: Sensors,
+  state: PlantState,
+  ambientPressure: number,
+  random: RandomState,
+): void {
+  updatePressure(sensors.boost, state.boostPressure, random);
+  updatePressure(sensors.manifold, state.intakePressure, random);
+  updatePressure(sensors.ambient, ambientPressure, random);
+  updateTemperature(sensors.charge, state.boostTemperature);
+  updateTemperature(sensors.inlet, state.inletTemperature);
+  countPulses(sensors.turboSpeed, state.turboSpeed);
+  sensors.engineSpeedRpm = inSteps(state.engineSpeed * RPM_PER_RADIAN, sensors.engineSpeedStep);
+}
+
+function updatePressure(sensor: PressureSensor, pressure: number, random: RandomState): void {
+  sensor.lagKpa += (pressure * 1e-3 - sensor.lagKpa) * sensor.follows;
+  let seen = sensor.lagKpa + sensor.biasKpa;
+  if (sensor.noiseKpa > 0) seen += sensor.noiseKpa * nextNormal(random);
+  seen = inSteps(seen - sensor.lowKpa, sensor.stepKpa) + sensor.lowKpa;
+  sensor.readingKpa = seen < sensor.lowKpa ? sensor.lowKpa : Math.min(seen, sensor.highKpa);
+}
+
+function updateTemperature(sensor: TemperatureSensor, temperature: number): void {
+  sensor.lag += (temperature - sensor.lag) * sensor.follows;
+  sensor.reading = inSteps(sensor.lag, sensor.step);
+}
+
+function countPulses(counter: SpeedCounter, speed: number): void {
+  counter.phase += speed * counter.pulsesPerMillisecondAndRadian;
+  const count = Math.floor(counter.phase);
+  counter.readingRpm = (count - counter.counts[counter.next]) * counter.rpmPerCount;
+  counter.counts[counter.next] = count;
+  counter.next = counter.next + 1 < counter.counts.length ? counter.next + 1 : 0;
+}
+
+/** Nearest multiple of `step`; a step of 0 passes the value on. */
+function inSteps(value: number, step: number): number {
+  return step > 0 ? Math.floor(value / step + 0.5) * step : value;
+}
