@@ -1,0 +1,49 @@
+import { type PlotOptions, plot } from "@observablehq/plot";
+import { parseHTML } from "linkedom";
+
+/** The little of a drawn element that is used here. */
+interface DrawnElement {
+  readonly outerHTML: string;
+  readonly attributes: ArrayLike<{ readonly name: string; readonly value: string }>;
+  setAttribute(name: string, value: string): void;
+  removeAttribute(name: string): void;
+  remove(): void;
+  querySelectorAll(selector: string): Iterable<DrawnElement>;
+}
+
+/** Hundredths of a pixel: no eye sees more, and the last bits of a library's logarithms stay out of the bytes. */
+function roundDecimals(value: string): string {
+  return value.replace(/-?\d+\.\d{3,}(?:e-?\d+)?/g, (number) => String(Number(Number(number).toFixed(2))));
+}
+
+/** The library numbers its clip paths through the life of the process; here they count from 1 in each chart. */
+function renumber(value: string, ids: Map<string, string>, prefix: string): string {
+  return value.replace(/plot-clip-\d+/g, (id) => {
+    if (!ids.has(id)) ids.set(id, `${prefix}-clip-${ids.size + 1}`);
+    return ids.get(id) as string;
+  });
+}
+
+function tidy(svg: DrawnElement, prefix: string): void {
+  const ids = new Map<string, string>();
+  for (const element of [svg, ...svg.querySelectorAll("*")]) {
+    for (const { name, value } of Array.from(element.attributes)) {
+      const tidied = renumber(name === "aria-label" ? value : roundDecimals(value), ids, prefix);
+      if (tidied !== value) element.setAttribute(name, tidied);
+    }
+  }
+}
+
+/**
+ * One chart as the text of an `svg` element. `prefix` makes ids unique on the page; `y` places the chart below
+ * others in an outer `svg`.
+ */
+export function drawChart(options: PlotOptions, prefix: string, y = 0): string {
+  const { document } = parseHTML("<!doctype html><html><body></body></html>");
+  const svg = plot({ ...options, document, className: "chart" }) as unknown as DrawnElement;
+  for (const style of svg.querySelectorAll("style")) style.remove();
+  for (const attribute of ["font-family", "font-size", "class", "fill"]) svg.removeAttribute(attribute);
+  svg.setAttribute("y", String(y));
+  tidy(svg, prefix);
+  return svg.outerHTML;
+}

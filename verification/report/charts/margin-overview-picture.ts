@@ -1,0 +1,108 @@
+import { axisX, axisY, dot, gridX, type PlotOptions, ruleX, ruleY, tickX } from "@observablehq/plot";
+import type { RequirementResult } from "../../evidence.ts";
+import { drawChart } from "./draw-chart.ts";
+import { strokeOf } from "./marks.ts";
+import { colour } from "./palette.ts";
+import type { Picture } from "./picture.ts";
+
+const WIDTH = 760;
+const LEFT = 250;
+const RIGHT = 16;
+const TOP = 28;
+const BOTTOM = 36;
+const ROW = 20;
+const LONGEST_LABEL = 38;
+
+interface Row {
+  readonly key: string;
+  readonly label: string;
+  readonly least: number;
+  readonly low: number;
+  readonly median: number;
+  readonly high: number;
+}
+
+function shortened(text: string): string {
+  const characters = [...text];
+  return characters.length <= LONGEST_LABEL
+    ? text
+    : `${characters.slice(0, LONGEST_LABEL - 1).join("")}\u2026`;
+}
+
+function rowOf(result: RequirementResult, i: number): Row[] {
+  const quantiles = result.margins?.quantiles;
+  if (quantiles === undefined || !Object.values(quantiles).every(Number.isFinite)) return [];
+  const label = shortened(`${result.id} / ${result.scenario}`);
+  const { least, p05, median, p95 } = quantiles;
+  return [{ key: String(i), label, least, low: p05, median, high: p95 }];
+}
+
+function overviewChart(rows: readonly Row[], height: number): PlotOptions {
+  const least = rows.reduce((a, row) => Math.min(a, row.least), 0);
+  const most = rows.reduce((a, row) => Math.max(a, row.high), 1);
+  const labels = new Map(rows.map(({ key, label }) => [key, label]));
+  return {
+    width: WIDTH,
+    height,
+    marginLeft: LEFT,
+    marginRight: RIGHT,
+    marginTop: TOP,
+    marginBottom: BOTTOM,
+    x: { domain: [least - 0.05 * (most - least), most], axis: null },
+    y: { domain: rows.map(({ key }) => key), type: "band", padding: 0.2, axis: null },
+    marks: [
+      gridX({ ticks: 8, stroke: colour("grid"), strokeOpacity: 1 }),
+      axisX({
+        ticks: 8,
+        label: "margin (0: the edge, negative: violated)",
+        labelArrow: "none",
+        labelAnchor: "center",
+      }),
+      axisY({ label: null, tickSize: 0, tickFormat: (key: string) => labels.get(key) ?? "" }),
+      ruleX([0], strokeOf("limit")),
+      ruleY(rows, {
+        y: "key",
+        x1: "low",
+        x2: "high",
+        stroke: colour("blue"),
+        strokeWidth: 5,
+        strokeOpacity: 0.5,
+      }),
+      tickX(rows, {
+        y: "key",
+        x: "median",
+        stroke: colour("ink"),
+        strokeWidth: 2,
+        insetTop: 3,
+        insetBottom: 3,
+      }),
+      dot(rows, {
+        y: "key",
+        x: "least",
+        r: 4,
+        symbol: "diamond",
+        fill: (row: Row) => (row.least < 0 ? colour("ink") : colour("paper")),
+        stroke: colour("ink"),
+        strokeWidth: 1.4,
+      }),
+    ],
+  };
+}
+
+/** Worst, middle and spread of the margins of every requirement, one row each; undefined without margins. */
+export function marginOverviewPicture(
+  id: string,
+  results: readonly RequirementResult[],
+): Picture | undefined {
+  const rows = results.flatMap(rowOf);
+  if (rows.length === 0) return undefined;
+  const height = TOP + BOTTOM + rows.length * ROW;
+  return {
+    id,
+    title: "Margins of all requirements",
+    description: "One row per requirement and scenario. The requirement table gives the same values.",
+    width: WIDTH,
+    height,
+    charts: [drawChart(overviewChart(rows, height), id)],
+  };
+}

@@ -1,0 +1,5 @@
+export type { Picture } from "./charts/picture.ts";
+export type { TracePlot } from "./charts/trace-plot.ts";
+export { renderReport } from "./render-report.ts";
+export { renderTraceHtml, renderTraceSvg } from "./render-trace-plot.ts";
+export type { Agreement, GeneratedFile, ReportContext } from "./report-context.ts";

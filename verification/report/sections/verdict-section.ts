@@ -1,0 +1,48 @@
+import type { Evidence, RequirementResult } from "../../evidence.ts";
+import { code, type Html, html, name } from "../html.ts";
+import { margin } from "../numbers.ts";
+import { slug } from "../slug.ts";
+import { count, overallVerdict, plural, verdictShape } from "../words.ts";
+
+function headline(evidence: Evidence): string {
+  const all = evidence.requirements.length;
+  if (all === 0) return "Nothing was tested: the evidence holds no requirement.";
+  const violated = count(evidence, "violated");
+  const silent = count(evidence, "not_exercised");
+  const rest = silent === 0 ? "" : ` ${silent} ${silent === 1 ? "was" : "were"} not exercised by any run.`;
+  if (violated > 0) return `${violated} of ${plural(all, "requirement")} violated.${rest}`;
+  if (silent === all) return "No requirement was exercised by any run; nothing is known.";
+  return `No violation found in ${plural(all - silent, "tested requirement")}.${rest}`;
+}
+
+function violation(result: RequirementResult, index: number): Html {
+  const worst = result.worst?.margin ?? result.corners.worst?.margin;
+  return html`<li><a href="#${slug("requirement", index)}">${name(result.id)}</a> on ${name(result.scenario)}:
+${name(result.says)}. ${plural(result.violations, "violation")} in ${plural(result.exercised, "random run")},
+${plural(result.corners.violations, "violation")} in ${plural(result.corners.exercised, "corner run")}${
+    worst === undefined ? "" : html`; worst margin ${margin(worst)}`
+  }.${
+    result.counterexample === undefined
+      ? undefined
+      : html`
+Replay the smallest manoeuvre found: ${code(`spoolwright replay ${result.counterexample}`)}`
+  }</li>`;
+}
+
+/** The answer, before anything else: one sentence with its shape, then what is violated and how to see it again. */
+export function verdictSection(evidence: Evidence): Html {
+  const overall = overallVerdict(evidence);
+  const violated = evidence.requirements.flatMap((result, i) =>
+    result.verdict === "violated" ? [violation(result, i)] : [],
+  );
+  return html`<section id="verdict" aria-labelledby="verdict-title">
+<h2 id="verdict-title">Verdict</h2>
+<p class="headline ${overall}">${verdictShape(overall)}<span>${headline(evidence)}</span></p>
+<p>${plural(evidence.simulations, "random simulation")} of ${plural(evidence.scenarios.length, "scenario")},
+${plural(evidence.runsPerScenario, "run")} each, all of the kind <em>tested</em>. Apart from these:
+${plural(evidence.extraSimulations.corner, "corner run")} and
+${plural(evidence.extraSimulations.shrink, "run")} spent on making counterexamples smaller.
+Nothing here is proved or searched.</p>
+${violated.length === 0 ? undefined : html`<ul class="violations">${violated}</ul>`}
+</section>`;
+}
