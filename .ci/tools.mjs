@@ -6,6 +6,8 @@ import { fileURLToPath } from "node:url";
 const works = (command, args) => spawnSync(command, args, { stdio: "ignore" }).status === 0;
 
 const TOOLS = {
+  // Where Debian's package puts it; the browser tests start this one.
+  chromium: () => works("/usr/bin/chromium", ["--version"]),
   clang: () => works("clang", ["--version"]),
   cppcheck: () => works("cppcheck", ["--version"]),
   // Debian's scipy belongs to Debian's interpreter, which need not be the first python3 of the path.
