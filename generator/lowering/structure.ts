@@ -1,9 +1,8 @@
-import type { Structure } from "../../runtime/structure.ts";
 import type { ControllerSpec, SignalName } from "../../spec/controller-spec.ts";
 import { stepsIn } from "./steps.ts";
 
-/** The compile-time choices that a spec makes. */
-export function structureOf(controller: ControllerSpec): Structure {
+/** Value of every field of the runtime's `Structure`: the compile-time choices that a spec makes. */
+export function structureOf(controller: ControllerSpec) {
   const { feedback, feedforward, overspeedGuard, signals, target } = controller;
   const floor = overspeedGuard?.proportional;
   const rate = (name: SignalName): boolean => signals[name]?.fault.rateAbove !== undefined;
