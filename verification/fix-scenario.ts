@@ -1,4 +1,4 @@
-import type { DrawnScenario, FixedCourse, FixedFault } from "../hil-sim/drawn-scenario.ts";
+import type { DrawnScenario, FixedCourse, FixedFault } from "../hil-sim/index.ts";
 import type { Course, FaultSpec, Free, ScenarioSpec } from "../spec/scenario-spec.ts";
 
 /** A place in a scenario that takes a number: its name in counterexamples, and its range. */
