@@ -9,14 +9,21 @@ export interface ValueTable {
 }
 
 function row([first, ...rest]: readonly HtmlPart[]): Html {
-  return html`<tr><th scope="row">${first}</th>${rest.map((cell) => html`<td>${cell}</td>`)}</tr>`;
+  return html`<tr><th scope="row">${first}</th>${rest.map(
+    (cell) => html`
+<td>${cell}</td>`,
+  )}</tr>
+`;
 }
 
 /** A table in a box that scrolls by itself, reachable by keyboard. */
 export function tableBox(table: ValueTable, className: string): Html {
   return html`<div class="box" role="region" tabindex="0" aria-label="${table.caption}">
 <table class="${className}"><caption>${table.caption}</caption>
-<thead><tr>${table.head.map((words) => html`<th scope="col">${words}</th>`)}</tr></thead>
+<thead><tr>${table.head.map(
+    (words) => html`<th scope="col">${words}</th>
+`,
+  )}</tr></thead>
 <tbody>${table.rows.map(row)}</tbody></table></div>`;
 }
 

@@ -69,7 +69,7 @@ table.inputs td:nth-child(2){text-align:right}
 ul.plain{list-style:none;padding:0;margin:0}
 .hash{font-size:.82em}
 figure{margin:.9rem 0 1.2rem}
-figcaption{color:var(--soft);font-size:.92rem}
+figcaption{color:var(--soft);font-size:.93em}
 details{margin-top:.3rem}
 summary{cursor:pointer;color:var(--accent);width:max-content;max-width:100%}
 .picture{display:block;width:100%;height:auto}
@@ -87,7 +87,7 @@ dl.facts dt{font-weight:400;color:var(--soft);max-width:14rem}
 `;
 
 const PRINT = `
-@page{size:A4;margin:14mm 13mm}
+@page{size:A4;margin:14mm 13mm 16mm;@bottom-right{content:counter(page) " of " counter(pages);font:8pt system-ui,sans-serif}}
 @media print{
 body{font-size:9.5pt}
 main,header,footer{max-width:none;padding:0}
@@ -100,9 +100,9 @@ table.requirements th[scope=row]{min-width:0}
 td,caption,table.requirements td.words{white-space:normal}
 .hash{font-size:.7em;word-break:break-all}
 figure,tr,.cautions,.headline{break-inside:avoid}
-h2,h3{break-after:avoid}
+h2,h3,caption{break-after:avoid}
 thead{display:table-header-group}
-.picture{min-width:0!important}
+.picture{min-width:0!important;max-width:165mm!important}
 .pair{grid-template-columns:minmax(0,1fr) minmax(0,1fr)}
 .verdict.violated{print-color-adjust:exact;-webkit-print-color-adjust:exact}
 }

@@ -28,22 +28,27 @@ function tidy(svg: DrawnElement, prefix: string): void {
   const ids = new Map<string, string>();
   for (const element of [svg, ...svg.querySelectorAll("*")]) {
     for (const { name, value } of Array.from(element.attributes)) {
-      const tidied = renumber(name === "aria-label" ? value : roundDecimals(value), ids, prefix);
+      const kept = name === "aria-label" || name.startsWith("data-");
+      const tidied = renumber(kept ? value : roundDecimals(value), ids, prefix);
       if (tidied !== value) element.setAttribute(name, tidied);
     }
   }
 }
 
+/** `data-` attributes of a chart, for the script. */
+export type ChartData = Readonly<Record<string, string | number>>;
+
 /**
  * One chart as the text of an `svg` element. `prefix` makes ids unique on the page; `y` places the chart below
  * others in an outer `svg`.
  */
-export function drawChart(options: PlotOptions, prefix: string, y = 0): string {
+export function drawChart(options: PlotOptions, prefix: string, y = 0, data: ChartData = {}): string {
   const { document } = parseHTML("<!doctype html><html><body></body></html>");
   const svg = plot({ ...options, document, className: "chart" }) as unknown as DrawnElement;
   for (const style of svg.querySelectorAll("style")) style.remove();
   for (const attribute of ["font-family", "font-size", "class", "fill"]) svg.removeAttribute(attribute);
   svg.setAttribute("y", String(y));
+  for (const [name, value] of Object.entries(data)) svg.setAttribute(`data-${name}`, String(value));
   tidy(svg, prefix);
   return svg.outerHTML;
 }

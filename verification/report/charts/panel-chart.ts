@@ -1,4 +1,5 @@
 import { axisX, axisY, gridX, gridY, type Markish, type PlotOptions, ruleY } from "@observablehq/plot";
+import type { ChartData } from "./draw-chart.ts";
 import { FRAME, legendMarks, PLOT_WIDTH, type Scales, seriesMark, strokeOf } from "./marks.ts";
 import { colour } from "./palette.ts";
 import { dropLevel, thinOut } from "./thin-out.ts";
@@ -72,8 +73,14 @@ export function timeFrame(height: number, axis: TimeAxis): PlotOptions {
   };
 }
 
+export interface PanelChart {
+  readonly options: PlotOptions;
+  /** What the script needs to read values off the lines. */
+  readonly data: ChartData;
+}
+
 /** Chart of one panel; undefined when the trace has none of its signals. */
-export function panelChart(panel: Panel, trace: TracePlot, axis: TimeAxis): PlotOptions | undefined {
+export function panelChart(panel: Panel, trace: TracePlot, axis: TimeAxis): PanelChart | undefined {
   const series = seriesOf(panel, trace);
   if (series.length === 0) return undefined;
   const levels = levelsOf(panel, trace);
@@ -85,7 +92,7 @@ export function panelChart(panel: Panel, trace: TracePlot, axis: TimeAxis): Plot
   const plotHeight = panel.height - FRAME.top - BOTTOM;
   const scales: Scales = { x: [0, axis.duration], y, plotWidth: PLOT_WIDTH, plotHeight };
   const names = [...series.map(({ line }) => line), ...levels.map(({ limit }) => limit)];
-  return {
+  const options: PlotOptions = {
     ...timeFrame(panelHeight(panel, axis), axis),
     y: { domain: [...y], axis: null },
     marks: [
@@ -97,4 +104,6 @@ export function panelChart(panel: Panel, trace: TracePlot, axis: TimeAxis): Plot
       ...legendMarks(scales, panel.title, names),
     ],
   };
+  const frame = { low: y[0], high: y[1], top: FRAME.top, bottom: FRAME.top + plotHeight };
+  return { options, data: { ...frame, series: series.map(({ line }) => line.name).join("|") } };
 }

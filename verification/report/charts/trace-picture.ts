@@ -1,17 +1,15 @@
 import { drawChart } from "./draw-chart.ts";
 import { FRAME } from "./marks.ts";
 import { modeChart, modeHeight, modeStretches } from "./mode-chart.ts";
-import { panelChart, panelHeight, type TimeAxis } from "./panel-chart.ts";
+import { type PanelChart, panelChart, panelHeight, type TimeAxis } from "./panel-chart.ts";
 import type { Picture } from "./picture.ts";
 import { PANELS } from "./trace-panels.ts";
 import type { TracePlot } from "./trace-plot.ts";
 
 const GAP = 6;
 
-type Chart = NonNullable<ReturnType<typeof panelChart>>;
-
 interface Sized {
-  readonly chart: Chart;
+  readonly chart: PanelChart;
   readonly height: number;
 }
 
@@ -30,7 +28,7 @@ function modeRow(trace: TracePlot, duration: number): Sized[] {
   if (trace.mode === undefined || trace.length === 0) return [];
   const axis: TimeAxis = { duration, labelled: true };
   const stretches = modeStretches(trace.mode, Math.min(trace.length, trace.mode.length), trace.stepS);
-  return [{ chart: modeChart(stretches, axis), height: modeHeight(stretches, axis) }];
+  return [{ chart: { options: modeChart(stretches, axis), data: {} }, height: modeHeight(stretches, axis) }];
 }
 
 /** The run as charts below each other on one time axis, the mode last. */
@@ -40,7 +38,7 @@ export function tracePicture(trace: TracePlot): Picture {
   const charts: string[] = [];
   let y = 0;
   for (const { chart, height } of [...panelCharts(trace, duration, mode.length === 0), ...mode]) {
-    charts.push(drawChart(chart, `${trace.id}-${charts.length + 1}`, y));
+    charts.push(drawChart(chart.options, `${trace.id}-${charts.length + 1}`, y, chart.data));
     y += height + GAP;
   }
   return {

@@ -4,15 +4,22 @@ import { margin } from "../numbers.ts";
 import { slug } from "../slug.ts";
 import { count, overallVerdict, plural, verdictShape } from "../words.ts";
 
+/** A requirement is listed once for each of its scenarios. */
+function countOfIds(results: readonly RequirementResult[]): number {
+  return new Set(results.map(({ id }) => id)).size;
+}
+
 function headline(evidence: Evidence): string {
-  const all = evidence.requirements.length;
-  if (all === 0) return "Nothing was tested: the evidence holds no requirement.";
-  const violated = count(evidence, "violated");
+  const pairs = evidence.requirements.length;
+  if (pairs === 0) return "Nothing was tested: the evidence holds no requirement.";
+  const all = countOfIds(evidence.requirements);
+  const violated = countOfIds(evidence.requirements.filter(({ verdict }) => verdict === "violated"));
   const silent = count(evidence, "not_exercised");
-  const rest = silent === 0 ? "" : ` ${silent} ${silent === 1 ? "was" : "were"} not exercised by any run.`;
+  const rest =
+    silent === 0 ? "" : ` Not exercised by any run: ${silent} of ${pairs} pairs of requirement and scenario.`;
   if (violated > 0) return `${violated} of ${plural(all, "requirement")} violated.${rest}`;
-  if (silent === all) return "No requirement was exercised by any run; nothing is known.";
-  return `No violation found in ${plural(all - silent, "tested requirement")}.${rest}`;
+  if (silent === pairs) return "No requirement was exercised by any run; nothing is known.";
+  return `No violation found: ${plural(all, "requirement")} tested.${rest}`;
 }
 
 function violation(result: RequirementResult, index: number): Html {
