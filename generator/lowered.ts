@@ -14,7 +14,7 @@ export interface Entry {
   readonly function: string;
   /** Printed name without the controller's prefix: `init`, `step_boost`; absent: snake case of the function. */
   readonly printed?: string;
-  readonly kind: "init" | "step";
+  readonly kind: "init" | "step" | "check";
   /** One or two sentences for the header: when to call it. */
   readonly when: string;
 }

@@ -1,0 +1,69 @@
+import type { Enumeration, Field, FieldType, Program } from "../ir/program.ts";
+import type { Precision, StructRole } from "../lowered.ts";
+import { namesOf } from "../print/names.ts";
+
+export interface LayoutField {
+  /** In the runtime; a dot stands before a part of a table. */
+  readonly name: string;
+  /** In generated C and TypeScript. */
+  readonly printed: string;
+  readonly type: FieldType;
+}
+
+export interface LayoutStruct {
+  readonly name: string;
+  readonly printed: string;
+  readonly role: StructRole;
+  readonly fields: readonly LayoutField[];
+}
+
+export interface LayoutEntry {
+  readonly function: string;
+  readonly printed: string;
+  readonly kind: "init" | "step" | "check";
+  /** Structs in the order of the parameters, by runtime name. */
+  readonly parameters: readonly { readonly name: string; readonly struct: string }[];
+}
+
+/** Names and shapes of a program's data, without its code: plain data that any thread can receive. */
+export interface Layout {
+  readonly stem: string;
+  readonly precision: Precision;
+  readonly structs: readonly LayoutStruct[];
+  readonly entries: readonly LayoutEntry[];
+  readonly enumerations: readonly Pick<Enumeration, "name" | "members">[];
+  readonly calibrationStruct?: string;
+}
+
+export const layoutOf = (program: Program): Layout => {
+  const names = namesOf(program);
+  const field = ({ name, type }: Field): LayoutField => ({ name, printed: names.field(name), type });
+  return {
+    stem: program.name,
+    precision: program.precision,
+    structs: program.structs.map((struct) => ({
+      name: struct.name,
+      printed: names.struct(struct.name),
+      role: struct.role,
+      fields: struct.fields.map(field),
+    })),
+    entries: program.entries.map((entry) => ({
+      function: entry.function,
+      printed: names.function(entry.function),
+      kind: entry.kind,
+      parameters: (program.functions.find(({ name }) => name === entry.function)?.parameters ?? []).flatMap(
+        ({ name, type }) => (type.kind === "struct" ? [{ name, struct: type.name }] : []),
+      ),
+    })),
+    enumerations: program.enumerations.map(({ name, members }) => ({ name, members })),
+    ...(program.calibrationStruct === undefined ? {} : { calibrationStruct: program.calibrationStruct }),
+  };
+};
+
+export const layoutStruct = (layout: Layout, name: string): LayoutStruct => {
+  const found = layout.structs.find((struct) => struct.name === name);
+  if (found === undefined) {
+    throw new Error(`internal: no struct ${name} in the layout`);
+  }
+  return found;
+};

@@ -1,0 +1,69 @@
+const LONGEST_COMMENT = 400;
+
+const PLAIN: Readonly<Record<string, string>> = {
+  "\u00b0": "deg ",
+  "\u00b1": "+-",
+  "\u00b2": "2",
+  "\u00b3": "3",
+  "\u00b5": "u",
+  "\u00b7": "*",
+  "\u00d7": "x",
+  "\u2013": "-",
+  "\u2014": "-",
+  "\u2018": "'",
+  "\u2019": "'",
+  "\u201c": '"',
+  "\u201d": '"',
+  "\u2212": "-",
+  "\u2264": "<=",
+  "\u2265": ">=",
+};
+
+/**
+ * Text on its way into a comment of generated code, made harmless: it cannot end the comment or open another, form a
+ * trigraph, continue a line, or carry anything but printable ASCII. Very long text is cut.
+ */
+export const commentText = (text: string): string => {
+  const ascii = [...text].map(
+    (each) => PLAIN[each] ?? (/[\x20-\x7e]/.test(each) ? each : /\s/.test(each) ? " " : "?"),
+  );
+  const harmless = ascii
+    .join("")
+    .replace(/\?(?=\?)/g, "? ")
+    .replace(/\*(?=\/)/g, "* ")
+    .replace(/\/(?=[*/])/g, "/ ")
+    .replace(/\\/g, "/")
+    .replace(/\/(?=[*/])/g, "/ ")
+    .replace(/\*(?=\/)/g, "* ")
+    .trimEnd();
+  return harmless.length > LONGEST_COMMENT ? `${harmless.slice(0, LONGEST_COMMENT - 3)}...` : harmless;
+};
+
+/** Harmless text in lines of at most `width`; the indent of an equation is kept on its further lines. */
+export const commentLines = (texts: readonly string[], width: number): readonly string[] =>
+  texts.flatMap((text) => {
+    const clean = commentText(text);
+    const indent = /^ */.exec(clean)?.[0] ?? "";
+    const lines: string[] = [];
+    let line = "";
+    for (const word of clean.trim().split(/ (?=\S)/)) {
+      if (line !== "" && indent.length + line.length + 1 + word.length > width) {
+        lines.push(indent + line);
+        line = word;
+      } else {
+        line = line === "" ? word : `${line} ${word}`;
+      }
+    }
+    return [...lines, (indent + line).trimEnd()];
+  });
+
+/** A block comment on as many lines as it needs, indented as the code it stands above. */
+export const blockComment = (texts: readonly string[], indent: string): readonly string[] => {
+  const lines = commentLines(texts, 104 - indent.length);
+  if (lines.length === 0) {
+    return [];
+  }
+  return lines.length === 1
+    ? [`${indent}/* ${lines[0]} */`]
+    : [...lines.map((line, i) => `${indent}${i === 0 ? "/*" : " *"} ${line}`.trimEnd()), `${indent} */`];
+};

@@ -1,0 +1,234 @@
+import type { CallExpression, Expression, Place } from "../ir/expression.ts";
+import { type FunctionDefinition, findStruct, type Program, type Struct } from "../ir/program.ts";
+import type { Statement } from "../ir/statement.ts";
+import { argumentValues, bodiesOf, eachExpression, eachStatement } from "../ir/walk.ts";
+
+/** The part of a program that liveness looks at. */
+export type Code = Pick<Program, "functions" | "structs"> & { readonly entries: readonly string[] };
+
+/** What something depends on, by key: `Struct.field`, `function(parameter`, `function:local`. Grows until nothing changes. */
+export interface Live {
+  readonly marks: ReadonlySet<string>;
+}
+
+export const fieldKey = (struct: string, field: string): string => `${struct}.${field}`;
+export const parameterKey = (owner: string, parameter: string): string => `${owner}(${parameter}`;
+const localKey = (owner: string, local: string): string => `${owner}:${local}`;
+
+/** Struct and field at each step along a place. */
+export const stepsOf = (
+  code: Pick<Code, "structs">,
+  owner: FunctionDefinition,
+  place: Place,
+): readonly { readonly struct: string; readonly field: string }[] => {
+  const parameter = owner.parameters.find(({ name }) => name === place.root);
+  let struct: Struct | undefined =
+    parameter?.type.kind === "struct" ? findStruct(code, parameter.type.name) : undefined;
+  return place.fields.map((field) => {
+    const step = { struct: struct?.name ?? "", field };
+    const type = struct?.fields.find(({ name }) => name === field)?.type;
+    struct = type?.kind === "struct" ? findStruct(code, type.name) : undefined;
+    return step;
+  });
+};
+
+const isLivePlace = (code: Code, live: Live, owner: FunctionDefinition, place: Place): boolean =>
+  stepsOf(code, owner, place).every(({ struct, field }) => live.marks.has(fieldKey(struct, field)));
+
+/** A call matters when something it writes matters: a written parameter whose object is live where it comes from. */
+const isCallNeeded = (code: Code, live: Live, owner: FunctionDefinition, call: CallExpression): boolean => {
+  const callee = code.functions.find(({ name }) => name === call.function);
+  return (callee?.parameters ?? []).some((parameter, i) => {
+    const argument = call.arguments[i];
+    return (
+      argument.kind === "struct" &&
+      live.marks.has(writeKey(call.function, parameter.name)) &&
+      isLivePlace(code, live, owner, argument.place)
+    );
+  });
+};
+
+/** The function writes something live through this parameter. */
+const writeKey = (owner: string, parameter: string): string => `${owner}!${parameter}`;
+
+const containsNeededCall = (
+  code: Code,
+  live: Live,
+  owner: FunctionDefinition,
+  expression: Expression,
+): boolean => {
+  let needed = false;
+  eachExpression(expression, (each) => {
+    needed ||= each.kind === "call" && isCallNeeded(code, live, owner, each);
+  });
+  return needed;
+};
+
+/** Whether a statement has an effect that anything live depends on. */
+export const isNeeded = (
+  code: Code,
+  live: Live,
+  owner: FunctionDefinition,
+  statement: Statement,
+): boolean => {
+  switch (statement.kind) {
+    case "local":
+      return (
+        live.marks.has(localKey(owner.name, statement.name)) ||
+        containsNeededCall(code, live, owner, statement.value)
+      );
+    case "assign":
+      return (
+        isTargetLive(code, live, owner, statement) || containsNeededCall(code, live, owner, statement.value)
+      );
+    case "call":
+      return isCallNeeded(code, live, owner, statement.call);
+    default:
+      return bodiesOf(statement).some((body) => body.some((each) => isNeeded(code, live, owner, each)));
+  }
+};
+
+export const isTargetLive = (
+  code: Code,
+  live: Live,
+  owner: FunctionDefinition,
+  { target }: Statement & { kind: "assign" },
+): boolean =>
+  target.kind === "local"
+    ? live.marks.has(localKey(owner.name, target.name))
+    : isLivePlace(code, live, owner, target.place);
+
+interface Marker {
+  readonly code: Code;
+  readonly marks: Set<string>;
+}
+
+const markPlace = ({ code, marks }: Marker, owner: FunctionDefinition, place: Place): void => {
+  marks.add(parameterKey(owner.name, place.root));
+  for (const { struct, field } of stepsOf(code, owner, place)) {
+    marks.add(fieldKey(struct, field));
+  }
+};
+
+const markRead = (marker: Marker, owner: FunctionDefinition, expression: Expression): void => {
+  eachExpression(expression, (each) => {
+    switch (each.kind) {
+      case "local":
+        marker.marks.add(localKey(owner.name, each.name));
+        marker.marks.add(parameterKey(owner.name, each.name));
+        break;
+      case "field":
+      case "element":
+      case "length":
+        markPlace(marker, owner, each.place);
+        break;
+      case "call":
+        markCall(marker, owner, each);
+        break;
+      default:
+    }
+  });
+};
+
+/** Arguments that the callee still uses; values among the others are not read at all. */
+const markCall = (marker: Marker, owner: FunctionDefinition, call: CallExpression): void => {
+  const callee = marker.code.functions.find(({ name }) => name === call.function);
+  marker.marks.add(call.function);
+  callee?.parameters.forEach((parameter, i) => {
+    const argument = call.arguments[i];
+    if (argument.kind === "value") {
+      return;
+    }
+    if (marker.marks.has(parameterKey(call.function, parameter.name))) {
+      markPlace(marker, owner, argument.place);
+    }
+    if (marker.marks.has(writeKey(call.function, parameter.name)) && argument.kind === "struct") {
+      if (isLivePlace(marker.code, marker, owner, argument.place)) {
+        marker.marks.add(writeKey(owner.name, argument.place.root));
+      }
+    }
+  });
+};
+
+const markStatement = (marker: Marker, owner: FunctionDefinition, statement: Statement): void => {
+  const { code, marks } = marker;
+  switch (statement.kind) {
+    case "local":
+      markRead(marker, owner, statement.value);
+      break;
+    case "assign": {
+      const { target } = statement;
+      if (target.kind !== "local" && isTargetLive(code, marker, owner, statement)) {
+        marks.add(parameterKey(owner.name, target.place.root));
+        marks.add(writeKey(owner.name, target.place.root));
+      }
+      if (target.kind === "element") {
+        markRead(marker, owner, target.index);
+      }
+      markRead(marker, owner, statement.value);
+      break;
+    }
+    case "if":
+      markRead(marker, owner, statement.condition);
+      break;
+    case "switch":
+      markRead(marker, owner, statement.subject);
+      break;
+    case "for":
+      markRead(marker, owner, statement.from);
+      markRead(marker, owner, statement.below);
+      break;
+    case "call":
+      for (const value of argumentValues(statement.call)) {
+        markRead(marker, owner, value);
+      }
+      markCall(marker, owner, statement.call);
+      break;
+    case "block":
+      break;
+  }
+};
+
+const markBody = (marker: Marker, owner: FunctionDefinition, body: readonly Statement[]): void => {
+  for (const statement of body) {
+    if (isNeeded(marker.code, marker, owner, statement)) {
+      markStatement(marker, owner, statement);
+      for (const inside of bodiesOf(statement)) {
+        markBody(marker, owner, inside);
+      }
+    }
+  }
+};
+
+/** Everything written into an output is wanted by the caller. */
+const markOutputs = (marker: Marker): void => {
+  const isOutput = (name: string) => findStruct(marker.code, name).role === "output";
+  for (const owner of marker.code.functions) {
+    eachStatement(owner.body, (statement) => {
+      if (statement.kind === "assign" && statement.target.kind !== "local") {
+        const steps = stepsOf(marker.code, owner, statement.target.place);
+        if (steps.length > 0 && isOutput(steps[0].struct)) {
+          markPlace(marker, owner, statement.target.place);
+        }
+      }
+    });
+  }
+};
+
+/** Marks what the results of the entries depend on, until a round adds nothing. */
+export const findLive = (code: Code): Live => {
+  const marker: Marker = { code, marks: new Set(code.entries) };
+  markOutputs(marker);
+  for (let before = -1; before !== marker.marks.size; ) {
+    before = marker.marks.size;
+    for (const owner of code.functions) {
+      if (marker.marks.has(owner.name)) {
+        markBody(marker, owner, owner.body);
+        if (owner.result !== undefined) {
+          markRead(marker, owner, owner.result);
+        }
+      }
+    }
+  }
+  return marker;
+};

@@ -1,0 +1,121 @@
+import type { RuntimeModule } from "../front/read-runtime.ts";
+import { rounding } from "../interpret/operations.ts";
+import type { Expression, Literal } from "../ir/expression.ts";
+import type { Constant, FunctionDefinition, Program, Struct } from "../ir/program.ts";
+import { eachExpressionOf, eachStatement } from "../ir/walk.ts";
+import type { Lowered } from "../lowered.ts";
+import { effectsOf } from "../validate/effects.ts";
+import { constantParameters, reachable } from "./constant-parameters.ts";
+import { countArrays } from "./count-arrays.ts";
+import { foldFunction } from "./fold-function.ts";
+import { inlineTrivial } from "./inline-trivial.ts";
+import type { Known } from "./known.ts";
+import { mapFunction } from "./map-function.ts";
+import { prune } from "./prune.ts";
+import { tidy } from "./tidy.ts";
+
+/** Folding, tidying and pruning feed each other; the runtime settles in five rounds, and more would change nothing. */
+const ROUNDS = 8;
+
+/** Literals and constants rounded to the precision once, here: later passes never round a number again. */
+const roundedNumbers = (
+  definition: FunctionDefinition,
+  round: (exact: number) => number,
+): FunctionDefinition =>
+  mapFunction(definition, (each): Expression => {
+    const isReal = each.kind === "real" || (each.kind === "constant" && each.type.kind === "real");
+    return isReal ? ({ ...each, value: round((each as Literal).value as number) } as Expression) : each;
+  });
+
+const roundedStructure = (lowered: Lowered, round: (exact: number) => number): Known["structure"] =>
+  Object.fromEntries(
+    Object.entries(lowered.structure).map(([name, value]) => [
+      name,
+      typeof value === "number" ? round(value) : value,
+    ]),
+  );
+
+const usedConstants = (
+  module: RuntimeModule,
+  lowered: Lowered,
+  functions: readonly FunctionDefinition[],
+): readonly Constant[] => {
+  const used = new Map<string, Constant>();
+  for (const definition of functions) {
+    eachExpressionOf(definition, (each) => {
+      if (each.kind === "constant") {
+        const declared = module.constants.find(({ name }) => name === each.name);
+        const unit = lowered.structureUnits?.[each.name];
+        used.set(each.name, {
+          name: each.name,
+          value: each.value,
+          type: each.type,
+          doc: declared?.doc ?? [],
+          ...(unit === undefined ? {} : { unit }),
+        });
+      }
+    });
+  }
+  return [...used.values()];
+};
+
+const usedEnumerations = (
+  functions: readonly FunctionDefinition[],
+  structs: readonly Struct[],
+): ReadonlySet<string> => {
+  const used = new Set<string>();
+  const note = (type: { readonly kind: string; readonly name?: string } | undefined): void => {
+    if (type?.kind === "enum" && type.name !== undefined) {
+      used.add(type.name);
+    }
+  };
+  for (const { type } of structs.flatMap(({ fields }) => fields)) {
+    note(type);
+  }
+  for (const definition of functions) {
+    note(definition.returns);
+    for (const { type } of definition.parameters) {
+      note(type);
+    }
+    eachStatement(definition.body, (each) => note(each.kind === "local" ? each.type : undefined));
+    eachExpressionOf(definition, (each) => note(each.type));
+  }
+  return used;
+};
+
+const round1 = (
+  functions: readonly FunctionDefinition[],
+  known: Omit<Known, "locals">,
+  entries: readonly string[],
+): readonly FunctionDefinition[] => {
+  const used = reachable(functions, entries);
+  const constants = constantParameters(used);
+  const folded = used.map((each) =>
+    foldFunction({ ...known, locals: constants.get(each.name) ?? new Map() }, each),
+  );
+  const effects = effectsOf(folded);
+  return inlineTrivial(folded.map((each) => tidy(each, effects)));
+};
+
+export type Specialised = Pick<Program, "functions" | "structs" | "constants" | "enumerations">;
+
+/** Fixes the spec's structure in the runtime: folds, drops what it does not choose, and what only that used. */
+export const specialise = (module: RuntimeModule, lowered: Lowered): Specialised => {
+  const round = rounding(lowered.precision);
+  const known = { precision: lowered.precision, structure: roundedStructure(lowered, round) };
+  const entries = lowered.entries.map((entry) => entry.function);
+  let functions: readonly FunctionDefinition[] = module.functions.map((each) => roundedNumbers(each, round));
+  let structs = module.structs;
+  for (let i = 0; i < ROUNDS; i++) {
+    functions = reachable(round1(functions, known, entries), entries);
+    ({ functions, structs } = prune({ functions, structs }, entries));
+  }
+  functions = countArrays(reachable(functions, entries));
+  const enumerations = usedEnumerations(functions, structs);
+  return {
+    functions,
+    structs,
+    constants: usedConstants(module, lowered, functions),
+    enumerations: module.enumerations.filter(({ name }) => enumerations.has(name)),
+  };
+};
