@@ -1,0 +1,60 @@
+import { STANDARD_ATMOSPHERE_PA, TWO_PI } from "../units.ts";
+import {
+  add,
+  decimal,
+  divide,
+  multiply,
+  nearestDouble,
+  power,
+  type Rational,
+  squareRoot,
+} from "./rational.ts";
+import type { Unit } from "./unit-expression.ts";
+
+export type LevelKind = "difference" | "temperature_level" | "absolute_pressure" | "gauge_pressure";
+
+const samePowers = (a: Unit, b: Unit): boolean =>
+  a.doubledPowers.every((each, i) => each === b.doubledPowers[i]);
+
+/** Only a power of time: where a turn and a plain 1/s would be mistaken for each other. */
+const isPureRate = (unit: Unit): boolean => {
+  const [kg, m, s, K] = unit.doubledPowers;
+  return kg === 0 && m === 0 && K === 0 && s !== 0;
+};
+
+/**
+ * True when a value in `written` can stand where `expected` is wanted. The radian has no dimension, but a
+ * rotational speed must say rpm, Hz or rad/s, and a plain rate or time must not.
+ */
+export function sameDimension(written: Unit, expected: Unit): boolean {
+  if (!samePowers(written, expected)) return false;
+  if (!isPureRate(expected)) return true;
+  if (!expected.angular) return !written.angular;
+  return written.angular || expected.doubledPowers[2] > 0;
+}
+
+/** Exact factor from `from` to `to`; two irrational sources (pi, odd half powers) to more than 60 digits. */
+function factorBetween(from: Unit, to: Unit): Rational {
+  const plain = squareRoot(divide(from.squaredFactor, to.squaredFactor));
+  const doubledTurns = from.doubledTurns - to.doubledTurns;
+  return doubledTurns === 0 ? plain : multiply(plain, squareRoot(power(TWO_PI, doubledTurns)));
+}
+
+function onScale(value: Rational, unit: Unit): Rational {
+  return unit.scale === undefined ? value : multiply(add(value, unit.scale.offset), unit.scale.factor);
+}
+
+/** The exact value of `text` (a decimal) in the unit `to` (K for a temperature level); dimensions must agree. */
+export function convertExactly(text: string, from: Unit, to: Unit, level: LevelKind): Rational {
+  const value = decimal(text);
+  if (level === "temperature_level") return onScale(value, from);
+  const scaled = multiply(value, factorBetween(from, to));
+  if (level !== "gauge_pressure") return scaled;
+  return add(scaled, divide(STANDARD_ATMOSPHERE_PA, squareRoot(to.squaredFactor)));
+}
+
+/** As `convertExactly`, rounded once to the nearest double. A number already in its base unit takes the short way. */
+export function convertQuantity(text: string, from: Unit, to: Unit, level: LevelKind): number {
+  const same = from.text === to.text && from.scale === undefined && level !== "gauge_pressure";
+  return same ? Number(text) : nearestDouble(convertExactly(text, from, to, level));
+}
