@@ -9,6 +9,9 @@ export { exponential, naturalLog, powerOf, standardPressure } from "./exact-math
 export { FAULT_KINDS, type FaultKindName } from "./faults.ts";
 export { type LoopPlant, type LoopStart, type RunSummary, runLoop } from "./loop/run-loop.ts";
 export { startOfRun, startPoint } from "./loop/start-of-run.ts";
+export { inletPressure } from "./plant/air-filter.ts";
+export { chokeFlow, peakFlow, usableHead } from "./plant/compressor.ts";
+export { compressorOutletPressure } from "./plant/intercooler.ts";
 export { newPlantFaults, type PlantFaults } from "./plant/plant-input.ts";
 export {
   copyPlantParameters,
@@ -17,6 +20,7 @@ export {
   plantParameters,
 } from "./plant/plant-parameters.ts";
 export type { PlantState } from "./plant/plant-state.ts";
+export { wastegateArea } from "./plant/wastegate.ts";
 export { nextBits, nextNormal, nextUniform, type RandomState, randomStream } from "./random.ts";
 export { type Equilibrium, equilibriumAt, equilibriumHolding } from "./steady/equilibrium.ts";
 export {
