@@ -39,9 +39,25 @@ export const commentText = (text: string): string => {
   return harmless.length > LONGEST_COMMENT ? `${harmless.slice(0, LONGEST_COMMENT - 3)}...` : harmless;
 };
 
+/** Lines of running text joined into paragraphs; indented lines (equations) and those after an empty one stand alone. */
+const paragraphs = (texts: readonly string[]): readonly string[] => {
+  const joined: string[] = [];
+  for (const text of texts) {
+    const before = joined[joined.length - 1];
+    const runsOn =
+      before !== undefined && /^\S/.test(before) && /^[^\s-]/.test(text) && !/[.:]$/.test(before);
+    if (runsOn) {
+      joined[joined.length - 1] = `${before} ${text}`;
+    } else {
+      joined.push(text);
+    }
+  }
+  return joined;
+};
+
 /** Harmless text in lines of at most `width`; the indent of an equation is kept on its further lines. */
 export const commentLines = (texts: readonly string[], width: number): readonly string[] =>
-  texts.flatMap((text) => {
+  paragraphs(texts).flatMap((text) => {
     const clean = commentText(text);
     const indent = /^ */.exec(clean)?.[0] ?? "";
     const lines: string[] = [];

@@ -14,7 +14,8 @@ const C_LIBRARY =
   "fmax fmin fma nan scalbn ilogb j0 j1 jn y0 y1 yn index time clock exit abort atexit free malloc calloc realloc rand " +
   "srand qsort getenv system read write open close link select min max clamp_real";
 
-const reserved = new Set(`${C_KEYWORDS} ${TYPESCRIPT_KEYWORDS} ${C_LIBRARY}`.split(" "));
+const keywords = new Set(`${C_KEYWORDS} ${TYPESCRIPT_KEYWORDS}`.split(" "));
+const functions = new Set(C_LIBRARY.split(" "));
 
 /** Longest identifier part that we make: C99 5.2.4.1 guarantees 31 significant characters for external names only. */
 const LONGEST_NAME = 24;
@@ -29,8 +30,11 @@ export const snakeCase = (name: string): string =>
 
 export const upperCase = (name: string): string => snakeCase(name).toUpperCase();
 
-/** A name that neither language reserves, the same in both. */
-export const safeName = (name: string): string => (reserved.has(name) ? `${name}_` : name);
+/** A name for data that neither language reserves, the same in both. */
+export const safeName = (name: string): string => (keywords.has(name) ? `${name}_` : name);
+
+/** A name for a function, which must not hide one of the C library either. */
+export const safeFunctionName = (name: string): string => (functions.has(name) ? `${name}_` : safeName(name));
 
 /**
  * Turns the controller's name from a spec, which may hold anything, into the stem of file and function names: lower
@@ -44,5 +48,5 @@ export const stemFrom = (name: string): string => {
     .slice(0, LONGEST_NAME)
     .replace(/_+$/, "");
   const lettered = /^[a-z]/.test(plain) ? plain : `loop_${plain}`.replace(/_+$/, "");
-  return reserved.has(lettered) ? `${lettered}_loop` : lettered;
+  return keywords.has(lettered) || functions.has(lettered) ? `${lettered}_loop` : lettered;
 };

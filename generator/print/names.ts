@@ -1,6 +1,6 @@
 import type { Program } from "../ir/program.ts";
 import { eachStatement } from "../ir/walk.ts";
-import { safeName, snakeCase, upperCase } from "./identifiers.ts";
+import { safeFunctionName, safeName, snakeCase, upperCase } from "./identifiers.ts";
 
 /** Name that the calibration check has in the runtime's style. */
 export const CHECK_CALIBRATION = "checkCalibration";
@@ -43,7 +43,7 @@ export const namesOf = (program: Program): Names => {
     program.entries.map((entry) => [entry.function, `${stem}_${entry.printed ?? snakeCase(entry.function)}`]),
   );
   const inner = (name: string): string => {
-    const plain = safeName(snakeCase(name));
+    const plain = safeFunctionName(snakeCase(name));
     return locals.has(plain) ? `compute_${plain}` : plain;
   };
   return {

@@ -30,6 +30,10 @@ const piecesAt = (line: string, breaks: readonly Break[], depth: number): readon
   return cuts.slice(1).map((cut, i) => line.slice(cuts[i], cut));
 };
 
+/** An assignment is broken after its sign only when the rest then fits on one line. */
+const isWorthIt = (line: string, at: number, indent: number): boolean =>
+  line.slice(at - 3, at) !== " = " || indent + line.length - at <= WIDTH;
+
 /** Breaks a line of C or TypeScript that is too wide, at the outermost brackets first; the text stays the same code. */
 export const wrap = (line: string): readonly string[] => {
   if (line.length <= WIDTH) {
@@ -37,7 +41,8 @@ export const wrap = (line: string): readonly string[] => {
   }
   const indent = /^ */.exec(line)?.[0] ?? "";
   const inner = `${indent}    `;
-  const breaks = breaksOf(line);
+  const inside = breaksOf(line).filter(({ at }) => at > indent.length);
+  const breaks = inside.filter(({ at }) => isWorthIt(line, at, inner.length));
   if (breaks.length === 0) {
     return [line];
   }

@@ -1,10 +1,13 @@
 import type { CallExpression, Expression, Place } from "../ir/expression.ts";
 import { type FunctionDefinition, findStruct, type Program, type Struct } from "../ir/program.ts";
 import type { Statement } from "../ir/statement.ts";
-import { argumentValues, bodiesOf, eachExpression, eachStatement } from "../ir/walk.ts";
+import { argumentValues, bodiesOf, eachCallOf, eachExpression, eachStatement } from "../ir/walk.ts";
 
 /** The part of a program that liveness looks at. */
-export type Code = Pick<Program, "functions" | "structs"> & { readonly entries: readonly string[] };
+export interface Code extends Pick<Program, "functions" | "structs"> {
+  readonly entries: readonly string[];
+  readonly byName: ReadonlyMap<string, FunctionDefinition>;
+}
 
 /** What something depends on, by key: `Struct.field`, `function(parameter`, `function:local`. Grows until nothing changes. */
 export interface Live {
@@ -37,7 +40,7 @@ const isLivePlace = (code: Code, live: Live, owner: FunctionDefinition, place: P
 
 /** A call matters when something it writes matters: a written parameter whose object is live where it comes from. */
 const isCallNeeded = (code: Code, live: Live, owner: FunctionDefinition, call: CallExpression): boolean => {
-  const callee = code.functions.find(({ name }) => name === call.function);
+  const callee = code.byName.get(call.function);
   return (callee?.parameters ?? []).some((parameter, i) => {
     const argument = call.arguments[i];
     return (
@@ -132,7 +135,7 @@ const markRead = (marker: Marker, owner: FunctionDefinition, expression: Express
 
 /** Arguments that the callee still uses; values among the others are not read at all. */
 const markCall = (marker: Marker, owner: FunctionDefinition, call: CallExpression): void => {
-  const callee = marker.code.functions.find(({ name }) => name === call.function);
+  const callee = marker.code.byName.get(call.function);
   marker.marks.add(call.function);
   callee?.parameters.forEach((parameter, i) => {
     const argument = call.arguments[i];
@@ -141,11 +144,6 @@ const markCall = (marker: Marker, owner: FunctionDefinition, call: CallExpressio
     }
     if (marker.marks.has(parameterKey(call.function, parameter.name))) {
       markPlace(marker, owner, argument.place);
-    }
-    if (marker.marks.has(writeKey(call.function, parameter.name)) && argument.kind === "struct") {
-      if (isLivePlace(marker.code, marker, owner, argument.place)) {
-        marker.marks.add(writeKey(owner.name, argument.place.root));
-      }
     }
   });
 };
@@ -160,7 +158,6 @@ const markStatement = (marker: Marker, owner: FunctionDefinition, statement: Sta
       const { target } = statement;
       if (target.kind !== "local" && isTargetLive(code, marker, owner, statement)) {
         marks.add(parameterKey(owner.name, target.place.root));
-        marks.add(writeKey(owner.name, target.place.root));
       }
       if (target.kind === "element") {
         markRead(marker, owner, target.index);
@@ -215,12 +212,37 @@ const markOutputs = (marker: Marker): void => {
   }
 };
 
+/** Whether a call writes something live through the object `root` of its caller. */
+const markCallWrites = ({ code, marks }: Marker, owner: FunctionDefinition, call: CallExpression): void => {
+  code.byName.get(call.function)?.parameters.forEach((parameter, i) => {
+    const argument = call.arguments[i];
+    const isWritten = argument.kind === "struct" && marks.has(writeKey(call.function, parameter.name));
+    if (isWritten && isLivePlace(code, { marks }, owner, argument.place)) {
+      marks.add(writeKey(owner.name, argument.place.root));
+    }
+  });
+};
+
+/** Every function's live writes, needed or not yet: they decide which calls are needed. */
+const markWrites = (marker: Marker, owner: FunctionDefinition): void => {
+  eachStatement(owner.body, (statement) => {
+    const isPlace = statement.kind === "assign" && statement.target.kind !== "local";
+    if (isPlace && isTargetLive(marker.code, marker, owner, statement)) {
+      marker.marks.add(writeKey(owner.name, (statement.target as { readonly place: Place }).place.root));
+    }
+  });
+  eachCallOf(owner, (call) => markCallWrites(marker, owner, call));
+};
+
 /** Marks what the results of the entries depend on, until a round adds nothing. */
 export const findLive = (code: Code): Live => {
   const marker: Marker = { code, marks: new Set(code.entries) };
   markOutputs(marker);
   for (let before = -1; before !== marker.marks.size; ) {
     before = marker.marks.size;
+    for (const owner of code.functions) {
+      markWrites(marker, owner);
+    }
     for (const owner of code.functions) {
       if (marker.marks.has(owner.name)) {
         markBody(marker, owner, owner.body);

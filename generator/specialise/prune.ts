@@ -13,7 +13,7 @@ import {
 import { mapFunction } from "./map-function.ts";
 
 const keptArguments = (code: Code, live: Live, call: CallExpression): CallExpression => {
-  const callee = code.functions.find(({ name }) => name === call.function);
+  const callee = code.byName.get(call.function);
   return {
     ...call,
     arguments: call.arguments.filter((_, i) => {
@@ -103,7 +103,8 @@ export const prune = (
   { functions, structs }: Pick<Program, "functions" | "structs">,
   entries: readonly string[],
 ): Pick<Program, "functions" | "structs"> => {
-  const code: Code = { functions, structs, entries };
+  const byName = new Map(functions.map((each) => [each.name, each]));
+  const code: Code = { functions, structs, entries, byName };
   const live = findLive(code);
   return {
     functions: functions
