@@ -38,17 +38,17 @@ interface FaultKind {
 /** Every kind of fault the loop knows: what it needs and what it does while in force. */
 export const FAULT_KINDS = {
   boost_pressure_stuck: {
-    fields: { at: "kPa abs" },
+    fields: { value: "kPa abs" },
     apply: (values, loop) => {
       loop.boostStuck = true;
-      loop.boostStuckKpa = values.at;
+      loop.boostStuckKpa = values.value;
     },
   },
   turbo_speed_stuck: {
-    fields: { at: "rpm" },
+    fields: { value: "rpm" },
     apply: (values, loop) => {
       loop.turboSpeedStuck = true;
-      loop.turboSpeedStuckRpm = values.at;
+      loop.turboSpeedStuckRpm = values.value;
     },
   },
   boost_pressure_lost: {
