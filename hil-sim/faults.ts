@@ -1,4 +1,5 @@
 import type { FixedFault } from "./drawn-scenario.ts";
+import { wholeMilliseconds } from "./milliseconds.ts";
 import type { PlantFaults } from "./plant/plant-input.ts";
 
 /** Faults of sensors and tasks in force; plant faults are separate. Stuck values kPa and rpm. */
@@ -9,9 +10,9 @@ export interface LoopFaults {
   boostStuckKpa: number;
   turboSpeedStuck: boolean;
   turboSpeedStuckRpm: number;
-  /** Seconds each activation of the guard starts late. */
+  /** Whole milliseconds each activation of the guard starts late. */
   guardDelay: number;
-  /** Seconds between activations of the guard, when longer than its step. */
+  /** Whole milliseconds between activations of the guard, when longer than its step. */
   guardPeriod: number;
 }
 
@@ -90,13 +91,13 @@ export const FAULT_KINDS = {
   guard_task_delayed: {
     fields: { by: "s" },
     apply: (values, loop) => {
-      loop.guardDelay += values.by;
+      loop.guardDelay += wholeMilliseconds(values.by);
     },
   },
   guard_task_every: {
     fields: { period: "s" },
     apply: (values, loop) => {
-      if (values.period > loop.guardPeriod) loop.guardPeriod = values.period;
+      loop.guardPeriod = Math.max(loop.guardPeriod, wholeMilliseconds(values.period));
     },
   },
   wastegate_stuck: {

@@ -21,7 +21,15 @@ export {
 } from "./plant/plant-parameters.ts";
 export type { PlantState } from "./plant/plant-state.ts";
 export { wastegateArea } from "./plant/wastegate.ts";
-export { nextBits, nextNormal, nextUniform, type RandomState, randomStream } from "./random.ts";
+export {
+  type NormalSource,
+  nextBits,
+  nextNormal,
+  nextUniform,
+  normalSource,
+  type RandomState,
+  randomStream,
+} from "./random.ts";
 export { type Equilibrium, equilibriumAt, equilibriumHolding } from "./steady/equilibrium.ts";
 export {
   type OpeningForBoost,

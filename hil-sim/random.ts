@@ -54,8 +54,29 @@ function byteSum(bits: number): number {
 /** 1 over the standard deviation of a sum of twelve bytes: 12 (256^2 - 1)/12 is its variance. */
 const PER_DEVIATION = 1 / Math.sqrt(65535);
 
-/** Normal deviate of mean 0 and variance 1. */
-export function nextNormal(state: RandomState): number {
-  const sum = byteSum(nextBits(state)) + byteSum(nextBits(state)) + byteSum(nextBits(state));
-  return (sum - 1530) * PER_DEVIATION;
+/** Normal deviates of mean 0 and variance 1, made in blocks. */
+export interface NormalSource {
+  readonly random: RandomState;
+  readonly deviates: Float64Array;
+  next: number;
+}
+
+export function normalSource(random: RandomState): NormalSource {
+  return { random, deviates: new Float64Array(240), next: 240 };
+}
+
+export function nextNormal(source: NormalSource): number {
+  if (source.next >= source.deviates.length) fillNormals(source);
+  const deviate = source.deviates[source.next];
+  source.next += 1;
+  return deviate;
+}
+
+function fillNormals(source: NormalSource): void {
+  const { random, deviates } = source;
+  for (let i = 0; i < deviates.length; i++) {
+    const sum = byteSum(nextBits(random)) + byteSum(nextBits(random)) + byteSum(nextBits(random));
+    deviates[i] = (sum - 1530) * PER_DEVIATION;
+  }
+  source.next = 0;
 }

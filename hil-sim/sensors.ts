@@ -7,13 +7,16 @@
 // source: common practice for lag and converter; counting: definition
 import type { PlantSpec, PressureSensorSpec } from "../spec/plant-spec.ts";
 import { exponential } from "./exact-math.ts";
+import { wholeMilliseconds } from "./milliseconds.ts";
 import type { PlantState } from "./plant/plant-state.ts";
-import { nextNormal, type RandomState } from "./random.ts";
+import { type NormalSource, nextNormal } from "./random.ts";
 
 const RPM_PER_RADIAN = 9.549296585513721;
 const REVOLUTIONS_PER_RADIAN = 0.15915494309189535;
 
 interface PressureSensor {
+  /** What it is exposed to, Pa. */
+  pressure: number;
   lagKpa: number;
   /** Share of the distance covered in 1 ms. */
   readonly follows: number;
@@ -26,6 +29,8 @@ interface PressureSensor {
 }
 
 interface TemperatureSensor {
+  /** What it is exposed to, K. */
+  temperature: number;
   lag: number;
   readonly follows: number;
   readonly step: number;
@@ -33,6 +38,8 @@ interface TemperatureSensor {
 }
 
 interface SpeedCounter {
+  /** Of the rotor, rad/s. */
+  speed: number;
   phase: number;
   /** Whole phases at each of the last milliseconds; as long as the window. */
   readonly counts: Float64Array;
@@ -44,6 +51,9 @@ interface SpeedCounter {
 
 /** All sensors of a plant with what they remember. */
 export interface Sensors {
+  /** All of `boost`, `manifold`, `ambient`; all of `charge`, `inlet`. */
+  readonly pressures: readonly PressureSensor[];
+  readonly temperatures: readonly TemperatureSensor[];
   readonly boost: PressureSensor;
   readonly manifold: PressureSensor;
   readonly ambient: PressureSensor;
@@ -54,33 +64,40 @@ export interface Sensors {
   engineSpeedRpm: number;
 }
 
-/** Sensors settled at a steady plant: `noise` multiplies every standard deviation. */
+/** Sensors settled at a steady plant: `noiseFactor` multiplies every standard deviation. */
 export function settledSensors(
   spec: PlantSpec["sensors"],
   state: PlantState,
   ambientPressure: number,
-  noise: number,
-  random: RandomState,
+  noiseFactor: number,
+  noise: NormalSource,
 ): Sensors {
+  const boost = pressureSensor(spec.boostPressure, state.boostPressure, noiseFactor);
+  const manifold = pressureSensor(spec.manifoldPressure, state.intakePressure, noiseFactor);
+  const ambient = pressureSensor(spec.ambientPressure, ambientPressure, noiseFactor);
+  const charge = temperatureSensor(spec.chargeTemperature, state.boostTemperature);
+  const inlet = temperatureSensor(spec.inletTemperature, state.inletTemperature);
   const sensors: Sensors = {
-    boost: pressureSensor(spec.boostPressure, state.boostPressure, noise),
-    manifold: pressureSensor(spec.manifoldPressure, state.intakePressure, noise),
-    ambient: pressureSensor(spec.ambientPressure, ambientPressure, noise),
-    charge: temperatureSensor(spec.chargeTemperature, state.boostTemperature),
-    inlet: temperatureSensor(spec.inletTemperature, state.inletTemperature),
-    turboSpeed: speedCounter(spec.turboSpeed),
+    pressures: [boost, manifold, ambient],
+    temperatures: [charge, inlet],
+    boost,
+    manifold,
+    ambient,
+    charge,
+    inlet,
+    turboSpeed: speedCounter(spec.turboSpeed, state.turboSpeed),
     engineSpeedStep: spec.engineSpeed.step * RPM_PER_RADIAN,
     engineSpeedRpm: 0.5,
   };
-  for (let i = 0; i < sensors.turboSpeed.counts.length; i++)
-    countPulses(sensors.turboSpeed, state.turboSpeed);
-  updateSensors(sensors, state, ambientPressure, random);
+  for (let i = 0; i < sensors.turboSpeed.counts.length; i++) countPulses(sensors.turboSpeed);
+  updateSensors(sensors, state, noise);
   return sensors;
 }
 
 function pressureSensor(spec: PressureSensorSpec, pressure: number, noise: number): PressureSensor {
   const steps = Math.max(1, Math.imul(1, 1 << Math.min(spec.bits, 30)) - 1);
   return {
+    pressure,
     lagKpa: pressure / 1000,
     follows: followsIn(spec.timeConstant),
     noiseKpa: (spec.noise * noise) / 1000,
@@ -96,12 +113,19 @@ function temperatureSensor(
   spec: { readonly timeConstant: number; readonly step: number },
   temperature: number,
 ): TemperatureSensor {
-  return { lag: temperature, follows: followsIn(spec.timeConstant), step: spec.step, reading: 0.5 };
+  return {
+    temperature,
+    lag: temperature,
+    follows: followsIn(spec.timeConstant),
+    step: spec.step,
+    reading: 0.5,
+  };
 }
 
-function speedCounter(spec: PlantSpec["sensors"]["turboSpeed"]): SpeedCounter {
-  const window = Math.max(1, Math.floor(spec.window * 1000 + 0.5));
+function speedCounter(spec: PlantSpec["sensors"]["turboSpeed"], speed: number): SpeedCounter {
+  const window = Math.max(1, wholeMilliseconds(spec.window));
   return {
+    speed,
     phase: 0.5,
     counts: new Float64Array(window),
     next: 0,
@@ -115,37 +139,34 @@ function followsIn(timeConstant: number): number {
   return timeConstant <= 0 ? 1 : 1 - exponential(-1e-3 / timeConstant);
 }
 
-/** Takes in the plant after a millisecond. */
-export function updateSensors(
-  sensors: Sensors,
-  state: PlantState,
-  ambientPressure: number,
-  random: RandomState,
-): void {
-  updatePressure(sensors.boost, state.boostPressure, random);
-  updatePressure(sensors.manifold, state.intakePressure, random);
-  updatePressure(sensors.ambient, ambientPressure, random);
-  updateTemperature(sensors.charge, state.boostTemperature);
-  updateTemperature(sensors.inlet, state.inletTemperature);
-  countPulses(sensors.turboSpeed, state.turboSpeed);
+/** Takes in the plant after a millisecond; ambient pressure stays. */
+export function updateSensors(sensors: Sensors, state: PlantState, noise: NormalSource): void {
+  sensors.boost.pressure = state.boostPressure;
+  sensors.manifold.pressure = state.intakePressure;
+  sensors.charge.temperature = state.boostTemperature;
+  sensors.inlet.temperature = state.inletTemperature;
+  sensors.turboSpeed.speed = state.turboSpeed;
+  for (let i = 0; i < sensors.pressures.length; i++) updatePressure(sensors.pressures[i], noise);
+  for (let i = 0; i < sensors.temperatures.length; i++) updateTemperature(sensors.temperatures[i]);
+  countPulses(sensors.turboSpeed);
   sensors.engineSpeedRpm = inSteps(state.engineSpeed * RPM_PER_RADIAN, sensors.engineSpeedStep);
 }
 
-function updatePressure(sensor: PressureSensor, pressure: number, random: RandomState): void {
-  sensor.lagKpa += (pressure * 1e-3 - sensor.lagKpa) * sensor.follows;
+function updatePressure(sensor: PressureSensor, noise: NormalSource): void {
+  sensor.lagKpa += (sensor.pressure * 1e-3 - sensor.lagKpa) * sensor.follows;
   let seen = sensor.lagKpa + sensor.biasKpa;
-  if (sensor.noiseKpa > 0) seen += sensor.noiseKpa * nextNormal(random);
+  if (sensor.noiseKpa > 0) seen += sensor.noiseKpa * nextNormal(noise);
   seen = inSteps(seen - sensor.lowKpa, sensor.stepKpa) + sensor.lowKpa;
   sensor.readingKpa = seen < sensor.lowKpa ? sensor.lowKpa : Math.min(seen, sensor.highKpa);
 }
 
-function updateTemperature(sensor: TemperatureSensor, temperature: number): void {
-  sensor.lag += (temperature - sensor.lag) * sensor.follows;
+function updateTemperature(sensor: TemperatureSensor): void {
+  sensor.lag += (sensor.temperature - sensor.lag) * sensor.follows;
   sensor.reading = inSteps(sensor.lag, sensor.step);
 }
 
-function countPulses(counter: SpeedCounter, speed: number): void {
-  counter.phase += speed * counter.pulsesPerMillisecondAndRadian;
+function countPulses(counter: SpeedCounter): void {
+  counter.phase += counter.speed * counter.pulsesPerMillisecondAndRadian;
   const count = Math.floor(counter.phase);
   counter.readingRpm = (count - counter.counts[counter.next]) * counter.rpmPerCount;
   counter.counts[counter.next] = count;

@@ -1,4 +1,5 @@
 import type { TraceSignal } from "../spec/requirement-spec.ts";
+import { wholeMilliseconds } from "./milliseconds.ts";
 
 /** One sample each millisecond, sample 0 at time zero; arrays are reused from run to run and may be longer than `length`. */
 export interface Trace {
@@ -13,7 +14,7 @@ export interface Trace {
 
 /** Memory for runs of up to `seconds`, of the named signals only. */
 export function newTrace(signals: readonly TraceSignal[], seconds: number, withMode = false): Trace {
-  const samples = Math.floor(seconds * 1000 + 0.5) + 1;
+  const samples = wholeMilliseconds(seconds) + 1;
   const arrays: Trace["signals"] = {};
   for (const signal of signals) arrays[signal] = new Float64Array(samples);
   const trace = { step: 1e-3, length: 0, signals: arrays };

@@ -7,9 +7,13 @@ import type { PlantFaults, PlantInput } from "../plant/plant-input.ts";
 import type { PlantParameters } from "../plant/plant-parameters.ts";
 import { newPlantState, type PlantState } from "../plant/plant-state.ts";
 import { limitState, newStepCounts, type StepCounts } from "./limit-state.ts";
+import { substepsPerMillisecond } from "./stiffness.ts";
 
 /** Memory of the method, made once per run; `flows` holds the last evaluation. */
 export interface HeunMemory {
+  /** Seconds. */
+  readonly step: number;
+  readonly stepsPerMillisecond: number;
   readonly rates: PlantState;
   readonly predicted: PlantState;
   readonly predictedRates: PlantState;
@@ -17,8 +21,12 @@ export interface HeunMemory {
   readonly counts: StepCounts;
 }
 
-export function newHeunMemory(): HeunMemory {
+/** Memory for a plant; its step is 1 ms, or a whole part of it where the plant's stiffness asks for that. */
+export function newHeunMemory(parameters: PlantParameters): HeunMemory {
+  const stepsPerMillisecond = substepsPerMillisecond(parameters);
   return {
+    step: 1e-3 / stepsPerMillisecond,
+    stepsPerMillisecond,
     rates: newPlantState(),
     predicted: newPlantState(),
     predictedRates: newPlantState(),
@@ -27,29 +35,26 @@ export function newHeunMemory(): HeunMemory {
   };
 }
 
-/** Advances `state` by `substeps` steps of `step` seconds with the input held. */
-export function heunSteps(
+/** Advances `state` by a millisecond with the input held. */
+export function heunMillisecond(
   parameters: PlantParameters,
   state: PlantState,
   input: PlantInput,
   faults: PlantFaults,
-  step: number,
-  substeps: number,
   memory: HeunMemory,
 ): void {
   const { rates, predicted, predictedRates, flows, counts } = memory;
-  for (let i = 0; i < substeps; i++) {
+  for (let i = 0; i < memory.stepsPerMillisecond; i++) {
     derivatives(parameters, state, input, faults, flows, rates);
-    moveAlong(state, rates, step, predicted);
+    predict(state, rates, memory.step, predicted);
     derivatives(parameters, predicted, input, faults, flows, predictedRates);
-    moveAlong(state, rates, 0.5 * step, state);
-    moveAlong(state, predictedRates, 0.5 * step, state);
+    correct(state, rates, predictedRates, 0.5 * memory.step);
     limitState(state, counts);
   }
 }
 
-/** into = from + step · rates; `into` may be `from`. */
-export function moveAlong(from: PlantState, rates: PlantState, step: number, into: PlantState): void {
+/** into = from + step · rates. */
+function predict(from: PlantState, rates: PlantState, step: number, into: PlantState): void {
   into.boostPressure = from.boostPressure + step * rates.boostPressure;
   into.intakePressure = from.intakePressure + step * rates.intakePressure;
   into.exhaustPressure = from.exhaustPressure + step * rates.exhaustPressure;
@@ -64,4 +69,22 @@ export function moveAlong(from: PlantState, rates: PlantState, step: number, int
   into.bypassOpening = from.bypassOpening + step * rates.bypassOpening;
   into.throttleOpening = from.throttleOpening + step * rates.throttleOpening;
   into.engineSpeed = from.engineSpeed + step * rates.engineSpeed;
+}
+
+/** state = state + half · (first + second). */
+function correct(state: PlantState, first: PlantState, second: PlantState, half: number): void {
+  state.boostPressure += half * (first.boostPressure + second.boostPressure);
+  state.intakePressure += half * (first.intakePressure + second.intakePressure);
+  state.exhaustPressure += half * (first.exhaustPressure + second.exhaustPressure);
+  state.outletPressure += half * (first.outletPressure + second.outletPressure);
+  state.turboSpeed += half * (first.turboSpeed + second.turboSpeed);
+  state.compressorFlow += half * (first.compressorFlow + second.compressorFlow);
+  state.boostTemperature += half * (first.boostTemperature + second.boostTemperature);
+  state.inletTemperature += half * (first.inletTemperature + second.inletTemperature);
+  state.exhaustTemperature += half * (first.exhaustTemperature + second.exhaustTemperature);
+  state.wallTemperature += half * (first.wallTemperature + second.wallTemperature);
+  state.wastegateOpening += half * (first.wastegateOpening + second.wastegateOpening);
+  state.bypassOpening += half * (first.bypassOpening + second.bypassOpening);
+  state.throttleOpening += half * (first.throttleOpening + second.throttleOpening);
+  state.engineSpeed += half * (first.engineSpeed + second.engineSpeed);
 }

@@ -3,16 +3,16 @@
 //   then the plant moves on by one millisecond and the sensors take it in
 import type { PlantSpec } from "../../spec/plant-spec.ts";
 import type { ControllerPort } from "../controller-port.ts";
-import { courseValue, type ReadyCourse, readyCourse } from "../course.ts";
+import { moveCourse, type ReadyCourse, readyCourse } from "../course.ts";
 import type { DrawnScenario } from "../drawn-scenario.ts";
 import { applyFaults, type LoopFaults, newLoopFaults } from "../faults.ts";
-import { type HeunMemory, heunSteps, newHeunMemory } from "../integrate/heun-step.ts";
-import { substepsPerMillisecond } from "../integrate/stiffness.ts";
+import { type HeunMemory, heunMillisecond, newHeunMemory } from "../integrate/heun-step.ts";
+import { wholeMilliseconds } from "../milliseconds.ts";
 import { derivatives } from "../plant/derivatives.ts";
 import { newPlantFaults, type PlantFaults, type PlantInput } from "../plant/plant-input.ts";
 import type { PlantParameters } from "../plant/plant-parameters.ts";
 import { copyPlantState, newPlantState, type PlantState } from "../plant/plant-state.ts";
-import { type RandomState, randomStream } from "../random.ts";
+import { type NormalSource, normalSource, randomStream } from "../random.ts";
 import { type Sensors, settledSensors, updateSensors } from "../sensors.ts";
 import { inputAt } from "../steady/operating-point.ts";
 import { type Trace, traceCapacity } from "../trace.ts";
@@ -58,7 +58,7 @@ export function runLoop(
   trace: Trace,
   start: LoopStart,
 ): RunSummary {
-  const milliseconds = Math.floor(scenario.duration * 1000 + 0.5);
+  const milliseconds = wholeMilliseconds(scenario.duration);
   if (traceCapacity(trace) <= milliseconds) throw new Error("the trace is shorter than the scenario");
   const run = newRun(plant, scenario, port, trace, start);
   for (let k = 0; k < milliseconds; k++) {
@@ -86,15 +86,17 @@ interface Run {
   readonly plantFaults: PlantFaults;
   readonly loopFaults: LoopFaults;
   readonly sensors: Sensors;
-  readonly random: RandomState;
+  readonly noise: NormalSource;
   readonly memory: HeunMemory;
-  readonly substeps: number;
   readonly schedule: TaskSchedule;
   readonly recorder: Recorder;
   readonly accelerator: ReadyCourse;
   readonly speedRpm: ReadyCourse | undefined;
+  /** The same one millisecond ahead. */
+  readonly nextSpeedRpm: ReadyCourse | undefined;
   readonly targetKpa: ReadyCourse | undefined;
   posedKpa: number;
+  /** Millisecond. */
   nextFaultChange: number;
   leftValidity: boolean;
 }
@@ -114,7 +116,7 @@ function newRun(
   const imposed = engineSpeed.kind === "imposed";
   const input = inputAt(point, state.wastegateOpening);
   input.freeVehicle = imposed ? 0 : 1;
-  const random = randomStream(scenario.noiseSeed, 0);
+  const noise = normalSource(randomStream(scenario.noiseSeed, 0));
   const run: Run = {
     parameters,
     validity: plant.validity,
@@ -124,14 +126,14 @@ function newRun(
     input,
     plantFaults: newPlantFaults(),
     loopFaults: newLoopFaults(),
-    sensors: settledSensors(plant.sensors, state, point.ambientPressure, scenario.sensorNoise, random),
-    random,
-    memory: newHeunMemory(),
-    substeps: substepsPerMillisecond(parameters),
+    sensors: settledSensors(plant.sensors, state, point.ambientPressure, scenario.sensorNoise, noise),
+    noise,
+    memory: newHeunMemory(parameters),
     schedule: newTaskSchedule(port),
     recorder: newRecorder(trace),
     accelerator: readyCourse(scenario.accelerator),
     speedRpm: imposed ? readyCourse(engineSpeed.course) : undefined,
+    nextSpeedRpm: imposed ? readyCourse(engineSpeed.course) : undefined,
     targetKpa: scenario.target === undefined ? undefined : readyCourse(scenario.target),
     posedKpa: Number.NaN,
     nextFaultChange: 0,
@@ -146,39 +148,42 @@ function newRun(
 /** Everything that happens at one instant: faults, target, sensors, controller, vehicle side, sample. */
 function decide(run: Run, millisecond: number): void {
   const { port, state } = run;
-  const time = millisecond / 1000;
-  if (time >= run.nextFaultChange) changeFaults(run, time);
-  if (run.targetKpa !== undefined) poseTarget(run, courseValue(run.targetKpa, time));
-  const accelerator = courseValue(run.accelerator, time);
-  feedController(run, accelerator);
+  if (millisecond >= run.nextFaultChange) changeFaults(run, millisecond);
+  if (run.targetKpa !== undefined) poseTarget(run, run.targetKpa, millisecond);
+  moveCourse(run.accelerator, millisecond);
+  feedController(run);
   runDueTasks(run.schedule, millisecond, run.loopFaults, port);
-  actOnPlant(accelerator, state.engineSpeed, port.output, run.input);
+  actOnPlant(port.input, port.output, state, run.input);
   recordSample(run.recorder, millisecond, state, run.memory.flows, port);
 }
 
 /** One millisecond of plant and sensors. */
 function advance(run: Run, millisecond: number): void {
-  const { state, input, substeps } = run;
-  if (run.speedRpm !== undefined) imposeSpeed(run.speedRpm, millisecond, state, input);
-  heunSteps(run.parameters, state, input, run.plantFaults, 1e-3 / substeps, substeps, run.memory);
-  updateSensors(run.sensors, state, input.ambientPressure, run.random);
+  const { state, input } = run;
+  imposeSpeed(run, millisecond);
+  heunMillisecond(run.parameters, state, input, run.plantFaults, run.memory);
+  updateSensors(run.sensors, state, run.noise);
   if (!run.leftValidity) run.leftValidity = outsideValidity(run);
 }
 
-function imposeSpeed(course: ReadyCourse, millisecond: number, state: PlantState, input: PlantInput): void {
-  const now = courseValue(course, millisecond / 1000) * RADIAN_PER_RPM;
-  const next = courseValue(course, (millisecond + 1) / 1000) * RADIAN_PER_RPM;
-  state.engineSpeed = now;
-  input.engineAcceleration = (next - now) * 1000;
+function imposeSpeed(run: Run, millisecond: number): void {
+  const { speedRpm, nextSpeedRpm } = run;
+  if (speedRpm === undefined || nextSpeedRpm === undefined) return;
+  moveCourse(speedRpm, millisecond);
+  moveCourse(nextSpeedRpm, millisecond + 1);
+  run.state.engineSpeed = speedRpm.current * RADIAN_PER_RPM;
+  run.input.engineAcceleration = (nextSpeedRpm.current - speedRpm.current) * (1000 * RADIAN_PER_RPM);
 }
 
-function poseTarget(run: Run, kilopascal: number): void {
-  if (kilopascal === run.posedKpa) return;
-  run.posedKpa = kilopascal;
-  run.port.poseTarget(kilopascal);
+function poseTarget(run: Run, target: ReadyCourse, millisecond: number): void {
+  moveCourse(target, millisecond);
+  if (target.current === run.posedKpa) return;
+  run.posedKpa = target.current;
+  run.port.poseTarget(target.current);
 }
 
-function changeFaults(run: Run, time: number): void {
+function changeFaults(run: Run, millisecond: number): void {
+  const time = millisecond / 1000;
   applyFaults(run.scenario.faults, time, run.loopFaults, run.plantFaults);
   let next = Number.POSITIVE_INFINITY;
   for (const fault of run.scenario.faults) {
@@ -186,14 +191,14 @@ function changeFaults(run: Run, time: number): void {
       if (edge > time && edge < next) next = edge;
     }
   }
-  run.nextFaultChange = next;
+  run.nextFaultChange = Math.floor(next * 1000);
 }
 
-function feedController(run: Run, accelerator: number): void {
+function feedController(run: Run): void {
   const { sensors, loopFaults } = run;
   const input = run.port.input;
   input.engineSpeedRpm = sensors.engineSpeedRpm;
-  input.acceleratorRatio = accelerator;
+  input.acceleratorRatio = run.accelerator.current;
   input.boostPressureKpa = loopFaults.boostLost
     ? Number.NaN
     : loopFaults.boostStuck

@@ -1,4 +1,4 @@
-import { courseValue, readyCourse } from "../course.ts";
+import { courseValue } from "../course.ts";
 import type { DrawnScenario } from "../drawn-scenario.ts";
 import { standardPressure } from "../exact-math.ts";
 import type { PlantParameters } from "../plant/plant-parameters.ts";
@@ -12,7 +12,7 @@ const RADIAN_PER_RPM = 0.10471975511965977;
 /** The operating point of a scenario's first instant. */
 export function startPoint(scenario: DrawnScenario): OperatingPoint {
   return {
-    throttle: courseValue(readyCourse(scenario.accelerator), 0),
+    throttle: courseValue(scenario.accelerator, 0),
     bypass: 0,
     fuel: 1,
     engineSpeed: startSpeedRpm(scenario) * RADIAN_PER_RPM,
@@ -23,9 +23,7 @@ export function startPoint(scenario: DrawnScenario): OperatingPoint {
 
 function startSpeedRpm(scenario: DrawnScenario): number {
   const { engineSpeed } = scenario;
-  return engineSpeed.kind === "vehicle"
-    ? engineSpeed.fromRpm
-    : courseValue(readyCourse(engineSpeed.course), 0);
+  return engineSpeed.kind === "vehicle" ? engineSpeed.fromRpm : courseValue(engineSpeed.course, 0);
 }
 
 /**
@@ -39,7 +37,7 @@ export function startOfRun(
 ): PlantState {
   const point = startPoint(scenario);
   const target = scenario.target;
-  const boostKpa = target === undefined ? scenario.startBoostKpa : courseValue(readyCourse(target), 0);
+  const boostKpa = target === undefined ? scenario.startBoostKpa : courseValue(target, 0);
   if (boostKpa === undefined) return equilibriumAt(parameters, point, restOpening).state;
   return openingForBoost(parameters, point, boostKpa * 1000).state;
 }

@@ -1,5 +1,6 @@
 import type { ControllerPort } from "../controller-port.ts";
 import type { LoopFaults } from "../faults.ts";
+import { wholeMilliseconds } from "../milliseconds.ts";
 
 /** When the controller's two tasks run next, in whole milliseconds. */
 export interface TaskSchedule {
@@ -25,16 +26,12 @@ export function runDueTasks(
   faults: LoopFaults,
   port: ControllerPort,
 ): void {
-  if (millisecond >= schedule.guardDue + wholeMilliseconds(faults.guardDelay)) {
+  if (millisecond >= schedule.guardDue + faults.guardDelay) {
     port.stepGuard();
-    schedule.guardDue = millisecond + Math.max(schedule.guardEvery, wholeMilliseconds(faults.guardPeriod));
+    schedule.guardDue = millisecond + Math.max(schedule.guardEvery, faults.guardPeriod);
   }
   if (millisecond >= schedule.slowDue) {
     port.stepBoost();
     schedule.slowDue = millisecond + schedule.slowEvery;
   }
-}
-
-function wholeMilliseconds(seconds: number): number {
-  return Math.floor(seconds * 1000 + 0.5);
 }

@@ -22,12 +22,11 @@ export function turbineFlow(
   ratio: number,
   rootTemperature: number,
 ): number {
-  let shape = 0;
-  if (ratio < parameters.turbineLinearAbove) shape = Math.sqrt(1 - ratio * ratio);
-  else {
-    shape = turbineLinearSlope(parameters) * (1 - ratio);
-    if (shape < -0.5) shape = -0.5;
-  }
+  const from = parameters.turbineLinearAbove;
+  const shape =
+    ratio < from
+      ? Math.sqrt(1 - ratio * ratio)
+      : Math.max((Math.sqrt(1 - from * from) / (1 - from)) * (1 - ratio), -0.5);
   return (parameters.turbineFlow * exhaustPressure * shape) / rootTemperature;
 }
 

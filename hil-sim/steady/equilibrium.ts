@@ -7,9 +7,8 @@
 //   A held boost adds x' = 0.1/s (pb - p_wanted)/bar, at its end stops x' = 0 outwards.
 // limits: dt -> 0 follows the plant in time; dt -> infinity converges quadratically near the solution
 // source: Kelley & Keyes, Convergence analysis of pseudo-transient continuation, SIAM J. Numer. Anal. 1998 (from memory)
-import { heunSteps, newHeunMemory } from "../integrate/heun-step.ts";
+import { heunMillisecond, newHeunMemory } from "../integrate/heun-step.ts";
 import { limitState } from "../integrate/limit-state.ts";
-import { substepsPerMillisecond } from "../integrate/stiffness.ts";
 import { derivatives } from "../plant/derivatives.ts";
 import type { PlantParameters } from "../plant/plant-parameters.ts";
 import { copyPlantState, newPlantState, type PlantState } from "../plant/plant-state.ts";
@@ -99,7 +98,7 @@ function newSearch(parameters: PlantParameters, point: OperatingPoint, heldBoost
     jacobian: new Float64Array(unknowns * unknowns),
     matrix: new Float64Array(unknowns * unknowns),
     trial: newPlantState(),
-    memory: newHeunMemory(),
+    memory: newHeunMemory(parameters),
     steps: 0,
   };
 }
@@ -180,14 +179,13 @@ function jacobian(search: Search, state: PlantState): void {
 /** Follows the plant itself in time. */
 function march(search: Search, state: PlantState, milliseconds: number): void {
   const { parameters, input, faults, memory } = search;
-  const n = substepsPerMillisecond(parameters);
   for (let i = 0; i < milliseconds; i++) {
     if (search.unknowns > STATES) {
       const moved = state.wastegateOpening + 1e-9 * (state.boostPressure - search.heldBoost);
       state.wastegateOpening = moved < 0 ? 0 : Math.min(moved, 1);
     }
     input.wastegateCommand = state.wastegateOpening;
-    heunSteps(parameters, state, input, faults, 1e-3 / n, n, memory);
+    heunMillisecond(parameters, state, input, faults, memory);
   }
 }
 
