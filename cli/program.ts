@@ -1,19 +1,17 @@
 import { Command } from "commander";
 import { CommandFailure } from "./command-failure.ts";
 import type { ExitCode } from "./exit-codes.ts";
+import { type CommonOptions, openSession } from "./session.ts";
 
 const VERSION = "0.1.0";
 
 /** The commands still to come, with the sentence that the help shows. */
 const PLANNED: readonly (readonly [string, string])[] = [
-  ["check", "reads a spec and reports diagnostics"],
-  ["explain", "cause, example and fix of a diagnostic"],
   ["generate", "writes the controller as TypeScript and C"],
   ["simulate", "one run of the loop, or the plant alone"],
   ["verify", "runs the requirements against random manoeuvres"],
   ["replay", "reruns a counterexample"],
   ["tune", "computes the feedforward map from the plant"],
-  ["steady", "steady map of the plant"],
   ["report", "writes the HTML report of an evidence file"],
 ];
 
@@ -28,12 +26,41 @@ function addPlanned(program: Command, name: string, sentence: string): void {
     });
 }
 
+/** A command with the options that all commands share. */
+const add = (program: Command, usage: string, sentence: string): Command =>
+  program
+    .command(usage)
+    .description(sentence)
+    .option("--json", "one JSON document on standard output and nothing else there")
+    .option("--quiet", "no text beside results and findings")
+    .option("--no-color", "no colour (also: NO_COLOR in the environment)");
+
 /** All commands; `done` receives the exit code of the one that ran. Commands load their code only when they run. */
-export function buildProgram(_done: (code: ExitCode) => void): Command {
+export function buildProgram(done: (code: ExitCode) => void): Command {
   const program = new Command("spoolwright")
     .description("From one spec of a boost loop to bit-identical TypeScript and C, plant tests and a report.")
     .version(VERSION)
     .exitOverride();
+
+  add(program, "check <spec>", "reads a spec and reports everything that is wrong with it").action(
+    async (spec: string, options: CommonOptions) => {
+      const { check } = await import("./commands/check.ts");
+      done(check(spec, openSession(options)));
+    },
+  );
+  add(program, "explain <code>", "cause, example and fix of a diagnostic").action(
+    async (code: string, options: CommonOptions) => {
+      const { explain } = await import("./commands/explain.ts");
+      done(explain(code, openSession(options)));
+    },
+  );
+  add(program, "steady <plant>", "steady map of the plant over engine speed and gate opening")
+    .option("--csv <file>", "write the map as CSV")
+    .action(async (plant: string, options: CommonOptions & { csv?: string }) => {
+      const { steady } = await import("./commands/steady.ts");
+      done(steady(plant, options, openSession(options)));
+    });
+
   for (const [name, sentence] of PLANNED) addPlanned(program, name, sentence);
   return program;
 }
