@@ -7,8 +7,8 @@ import { recorded, samplesIn } from "./recorded.ts";
  * Mean of true minus wanted boost over the last `over` seconds before the next command (or the end), as a ratio of the
  * mean wanted boost, either sign.
  *   margin = (atMost - |mean error|) / atMost, at least -3
- * The hold before the first command is judged too; the least margin counts. Windows shorter than `over` cannot be
- * judged; undefined (not exercised) when none was.
+ * The hold that opens a trace is a start, not an answer: it is judged only where no command follows. The least margin
+ * counts. Windows shorter than `over` cannot be judged; undefined (not exercised) when none was.
  */
 export function steadyError(
   trace: Trace,
@@ -20,7 +20,8 @@ export function steadyError(
   const wanted = recorded(trace, "boost_wanted");
   const count = samplesIn(trace, over);
   let least: number | undefined;
-  for (const command of commands) {
+  const answers = commands.filter(({ begins }) => begins > 0);
+  for (const command of answers.length > 0 ? answers : commands) {
     if (command.until - command.at < count) continue;
     let error = 0;
     let sum = 0;

@@ -145,19 +145,41 @@ describe("rises", () => {
 });
 
 describe("steady error", () => {
-  it("is the mean over the last stretch of each hold, either sign, and the worst hold counts", () => {
-    const offset = double({ min: -0.02, max: 0.02, noNaN: true });
+  const offset = double({ min: -0.02, max: 0.02, noNaN: true });
+  const marginOf = (wanted: (seconds: number) => number, error: (seconds: number) => number) => {
+    const ripple = (t: number) => Math.sin(t * 20 * Math.PI);
+    const trace = traceOf(0.001, 4000, {
+      boost_wanted: wanted,
+      boost_pressure: (t) => wanted(t) * (1 + error(t)) + ripple(t),
+    });
+    return steadyError(trace, findCommands(trace), 0.01, 0.3);
+  };
+
+  it("is the mean over the last stretch after each command, either sign, and the worst counts", () => {
+    const wanted = (t: number) => (t < 0.9995 ? 100 : t < 1.9995 ? 200 : 150);
     assert(
       property(offset, offset, (first, second) => {
-        const wanted = (t: number) => (t < 0.9995 ? 100 : 200);
-        const boost = (t: number) =>
-          wanted(t) * (1 + (t < 0.9995 ? first : second)) + Math.sin(t * 20 * Math.PI);
-        const trace = traceOf(0.001, 3000, { boost_wanted: wanted, boost_pressure: boost });
+        const margin = marginOf(wanted, (t) => (t < 1.9995 ? first : second));
         const worst = Math.max(Math.abs(first), Math.abs(second));
-        expect(steadyError(trace, findCommands(trace), 0.01, 0.3)).toBeCloseTo((0.01 - worst) / 0.01, 6);
+        expect(margin).toBeCloseTo((0.01 - worst) / 0.01, 6);
       }),
       { seed: 9 },
     );
+  });
+
+  it("leaves out the start of a trace, unless nothing follows", () => {
+    expect(
+      marginOf(
+        (t) => (t < 0.9995 ? 100 : 200),
+        (t) => (t < 0.9995 ? 0.05 : 0),
+      ),
+    ).toBeCloseTo(1, 6);
+    expect(
+      marginOf(
+        () => 200,
+        () => 0.005,
+      ),
+    ).toBeCloseTo(0.5, 6);
   });
 
   it("windows shorter than the stretch are not judged", () => {
