@@ -1,7 +1,7 @@
 import { spawnSync } from "node:child_process";
 
 /** Programs outside npm, by the name that `npm test -- --without NAME` takes; `.ci/tools.mjs` holds the same list. */
-export type ToolName = "clang" | "cppcheck" | "scipy";
+export type ToolName = "chromium" | "clang" | "cppcheck" | "scipy";
 
 const works = (command: string, args: readonly string[]): boolean =>
   spawnSync(command, args, { stdio: "ignore" }).status === 0;
@@ -11,6 +11,7 @@ export const pythonWithScipy = (): string | undefined =>
   ["/usr/bin/python3", "python3"].find((python) => works(python, ["-c", "import scipy"]));
 
 const PRESENT: Record<ToolName, () => boolean> = {
+  chromium: () => works("/usr/bin/chromium", ["--version"]),
   clang: () => works("clang", ["--version"]),
   cppcheck: () => works("cppcheck", ["--version"]),
   scipy: () => pythonWithScipy() !== undefined,
