@@ -14,9 +14,6 @@ const ARGUMENTS = [
   "--disable-sync",
 ];
 
-/** `npm test -- --without chromium` excuses these tests; otherwise a missing browser fails them. */
-export const withoutChromium = (process.env.SPOOLWRIGHT_WITHOUT ?? "").split(",").includes("chromium");
-
 export type Browser = Awaited<ReturnType<typeof startChromium>>;
 export type Page = Awaited<ReturnType<Browser["newPage"]>>;
 

@@ -4,9 +4,10 @@ import { join } from "node:path";
 import { pathToFileURL } from "node:url";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { renderReport } from "../../verification/report/index.ts";
+import { cannotUse } from "../support/tool.ts";
 import { sampleContext } from "../verification/report/sample-context.ts";
 import { sampleEvidence, sampleResult, violated } from "../verification/report/sample-evidence.ts";
-import { type Browser, type Page, startChromium, withoutChromium } from "./chromium.ts";
+import { type Browser, type Page, startChromium } from "./chromium.ts";
 import {
   BROKEN_LINKS,
   CLIPPED_LABELS,
@@ -24,7 +25,7 @@ interface Watched {
   readonly complaints: readonly string[];
 }
 
-describe.skipIf(withoutChromium)("the report in a browser", () => {
+describe.skipIf(cannotUse("chromium"))("the report in a browser", () => {
   let browser: Browser;
   let folder: string;
   let reports: Readonly<Record<"usual" | "hostile", string>>;

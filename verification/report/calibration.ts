@@ -1,6 +1,4 @@
-import type { ControllerSpec } from "../../spec/controller-spec.ts";
-import type { CurveSpec, Quantity, TableSpec } from "../../spec/quantity.ts";
-import type { Span } from "../../spec/span.ts";
+import type { ControllerSpec, CurveSpec, Quantity, Span, TableSpec } from "../../spec/index.ts";
 
 /** One calibration value by its place in the spec: `feedback.proportional`. */
 export type CalibrationEntry = { readonly path: string; readonly at: Span } & (

@@ -1,4 +1,4 @@
-import type { LoopSpec } from "../../spec/loop-spec.ts";
+import type { LoopSpec } from "../../spec/index.ts";
 
 /** One file of the generated code. */
 export interface GeneratedFile {

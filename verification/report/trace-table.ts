@@ -1,4 +1,4 @@
-import { TRACE_SIGNALS, type TraceSignal } from "../../spec/requirement-spec.ts";
+import { TRACE_SIGNALS, type TraceSignal } from "../../spec/index.ts";
 import { modeName } from "./charts/mode-chart.ts";
 import type { TracePlot } from "./charts/trace-plot.ts";
 import type { ValueTable } from "./figure.ts";

@@ -59,6 +59,17 @@ describe("the report", () => {
     );
   });
 
+  test("shows the worst verdict by shape as well as in words", () => {
+    const shapes = (requirements: Evidence["requirements"]): number[] => {
+      const document = read(renderReport(sampleEvidence({ requirements })));
+      return [".headline.violated .solid", ".headline.holds circle"].map(
+        (selector) => document.querySelectorAll(selector).length,
+      );
+    };
+    expect(shapes([sampleResult(), sampleResult(violated)])).toEqual([1, 0]);
+    expect(shapes([sampleResult()])).toEqual([0, 1]);
+  });
+
   test("gives margins, runs, violations, bound, line and worst inputs of each requirement", () => {
     const document = read(renderReport(sampleEvidence()));
     const rows = Array.from(document.querySelectorAll("table.requirements tbody tr"), ({ textContent }) =>

@@ -1,5 +1,4 @@
-import type { ControllerSpec } from "../../../spec/controller-spec.ts";
-import type { Span } from "../../../spec/span.ts";
+import type { ControllerSpec, Span } from "../../../spec/index.ts";
 import type { ReportContext } from "../../../verification/report/index.ts";
 
 const at = (line: number): Span => ({ file: "skarn24.yaml", line, column: 3, endLine: line, endColumn: 9 });

@@ -1,5 +1,5 @@
 import { axisY, barX, type PlotOptions, text } from "@observablehq/plot";
-import { MODES } from "../../../hil-sim/controller-port.ts";
+import { MODES } from "../../../hil-sim/index.ts";
 import { colour } from "./palette.ts";
 import { type TimeAxis, timeFrame, timeMarks } from "./panel-chart.ts";
 

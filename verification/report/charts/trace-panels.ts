@@ -1,4 +1,4 @@
-import type { TraceSignal } from "../../../spec/requirement-spec.ts";
+import type { TraceSignal } from "../../../spec/index.ts";
 import type { Limits } from "../../evidence.ts";
 import type { LineRole } from "./line-style.ts";
 

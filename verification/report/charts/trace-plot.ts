@@ -1,4 +1,4 @@
-import type { TraceSignal } from "../../../spec/requirement-spec.ts";
+import type { TraceSignal } from "../../../spec/index.ts";
 import type { Limits } from "../../evidence.ts";
 
 /** One run over time, whoever made it: a worst run of the evidence, a simulation, a replay. */

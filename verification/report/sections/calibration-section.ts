@@ -1,4 +1,4 @@
-import type { CurveSpec, TableSpec } from "../../../spec/quantity.ts";
+import type { CurveSpec, TableSpec } from "../../../spec/index.ts";
 import { type CalibrationEntry, calibrationEntries } from "../calibration.ts";
 import { tableBox } from "../figure.ts";
 import { code, type Html, html, name } from "../html.ts";
