@@ -65,7 +65,9 @@ const row = (point: SteadyPoint): string =>
     point.compressor_flow_kg_s.toFixed(4).padStart(10),
     point.engine_torque_nm.toFixed(0).padStart(11),
     point.converged ? "" : " no steady state (surge)",
-  ].join(" ");
+  ]
+    .join(" ")
+    .trimEnd();
 
 function mapCsv(map: readonly SteadyPoint[]): string {
   const columns = Object.keys(map[0]) as (keyof SteadyPoint)[];
