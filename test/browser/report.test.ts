@@ -3,10 +3,15 @@ import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { pathToFileURL } from "node:url";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { renderReport } from "../../verification/report/index.ts";
+import { renderReport, renderTraceSvg } from "../../verification/report/index.ts";
 import { cannotUse } from "../support/tool.ts";
 import { sampleContext } from "../verification/report/sample-context.ts";
-import { sampleEvidence, sampleResult, violated } from "../verification/report/sample-evidence.ts";
+import {
+  sampleEvidence,
+  sampleResult,
+  sampleTrace,
+  violated,
+} from "../verification/report/sample-evidence.ts";
 import { type Browser, type Page, startChromium } from "./chromium.ts";
 import {
   BROKEN_LINKS,
@@ -155,6 +160,20 @@ describe.skipIf(cannotUse("chromium"))("the report in a browser", () => {
     const read = await figure.locator("output").textContent();
     const trace = sampleEvidence().traces[0].signals.boost_pressure?.[200] ?? Number.NaN;
     expect(Number(read?.match(/^2\.000 s: .*\bboost ([\d.]+)/)?.[1])).toBeCloseTo(trace, 0);
+    expect(complaints).toEqual([]);
+    await page.close();
+  });
+
+  test("a run's SVG file is well-formed, whatever its title holds, and stands in light colours in a dark browser", async () => {
+    const { signals, mode, stepS } = sampleTrace("tip_in", 1);
+    const title = `<b>"&nbsp;' \u0000\u00a0]]> --> \u202E`;
+    const svg = renderTraceSvg({ id: "run", title, stepS, length: 401, signals, mode });
+    const { page, complaints } = await open(write("run.svg", svg), 800, { colorScheme: "dark" });
+    expect(await page.evaluate("document.documentElement.nodeName")).toBe("svg");
+    expect(await page.evaluate("document.querySelectorAll('parsererror').length")).toBe(0);
+    expect(await page.evaluate("getComputedStyle(document.querySelector('text')).fill")).toBe(
+      "rgb(27, 31, 35)",
+    );
     expect(complaints).toEqual([]);
     await page.close();
   });

@@ -19,6 +19,14 @@ import type { Picture } from "./picture.ts";
 const HEIGHT = 470;
 const BOTTOM = 38;
 const RIGHT = 34;
+const SIZES = {
+  width: FRAME.width,
+  height: HEIGHT,
+  marginLeft: FRAME.left,
+  marginRight: RIGHT,
+  marginTop: FRAME.top,
+  marginBottom: BOTTOM,
+} as const;
 const LABEL_WIDTH = 34;
 const LABEL_HEIGHT = 15;
 
@@ -127,36 +135,42 @@ function trackMarks(track: MapTrack, frame: Frame): Markish[] {
   ];
 }
 
+function axisMarks(): Markish[] {
+  const grid = { ticks: 8, stroke: colour("grid"), strokeOpacity: 1 };
+  const words = "corrected flow per turbo, kg/s";
+  return [
+    gridX(grid),
+    gridY(grid),
+    axisX({ ticks: 8, label: words, labelArrow: "none", labelAnchor: "center" }),
+    axisY({ ticks: 8, label: null }),
+  ];
+}
+
+function legendEntries(tracks: readonly MapTrack[]): { readonly role: LineRole; readonly name: string }[] {
+  return [
+    ...tracks.slice(0, 1).map(({ role, name }) => ({ role, name })),
+    { role: "limit", name: "surge line" },
+    { role: "followed", name: "choke" },
+    { role: "context", name: "speed, 1000 rpm" },
+  ];
+}
+
 function mapChart(map: CompressorMap, tracks: readonly MapTrack[]): PlotOptions {
   const frame = frameOf(map, tracks);
   const plotWidth = FRAME.width - FRAME.left - RIGHT;
   const scales = { ...frame, plotWidth, plotHeight: HEIGHT - FRAME.top - BOTTOM };
-  const legend = [
-    ...tracks.slice(0, 1).map(({ role, name }) => ({ role, name })),
-    { role: "limit", name: "surge line" } as const,
-    { role: "followed", name: "choke" } as const,
-    { role: "context", name: "speed, 1000 rpm" } as const,
-  ];
   return {
-    width: FRAME.width,
-    height: HEIGHT,
-    marginLeft: FRAME.left,
-    marginRight: RIGHT,
-    marginTop: FRAME.top,
-    marginBottom: BOTTOM,
+    ...SIZES,
     x: { domain: [...frame.x], axis: null },
     y: { domain: [...frame.y], axis: null },
     marks: [
-      gridX({ ticks: 8, stroke: colour("grid"), strokeOpacity: 1 }),
-      gridY({ ticks: 8, stroke: colour("grid"), strokeOpacity: 1 }),
-      axisX({ ticks: 8, label: "corrected flow per turbo, kg/s", labelArrow: "none", labelAnchor: "center" }),
-      axisY({ ticks: 8, label: null }),
+      ...axisMarks(),
       ...map.speedLines.map(({ points }) => pathMark(points, "context")),
       pathMark(map.surge, "limit"),
       pathMark(map.choke, "followed"),
       speedLabels(map, frame),
       ...tracks.flatMap((track) => trackMarks(track, frame)),
-      ...legendMarks(scales, "pressure ratio", legend),
+      ...legendMarks(scales, "pressure ratio", legendEntries(tracks)),
     ],
   };
 }

@@ -1,12 +1,18 @@
-import { axisX, axisY, gridY, type PlotOptions, rectY, ruleX, text } from "@observablehq/plot";
+import { axisX, axisY, gridY, type Markish, type PlotOptions, rectY, ruleX, text } from "@observablehq/plot";
 import type { MarginDistribution } from "../../evidence.ts";
 import { drawChart } from "./draw-chart.ts";
 import { strokeOf } from "./marks.ts";
 import { colour } from "./palette.ts";
 import type { Picture } from "./picture.ts";
 
-const WIDTH = 420;
-const HEIGHT = 170;
+const SIZES = {
+  width: 420,
+  height: 170,
+  marginLeft: 52,
+  marginRight: 14,
+  marginTop: 24,
+  marginBottom: 36,
+} as const;
 
 export interface Bin {
   readonly low: number;
@@ -19,35 +25,33 @@ export function binsOf({ low, high, counts }: MarginDistribution["histogram"]): 
   return counts.map((count, i) => ({ low: low + i * width, high: low + (i + 1) * width, count }));
 }
 
+function barMarks(bins: readonly Bin[]): Markish[] {
+  const place = { x1: "low", x2: "high", y: "count", insetLeft: 0.5, insetRight: 0.5 };
+  const holds = bins.filter(({ high }) => high > 0);
+  const violated = bins.filter(({ high }) => high <= 0);
+  return [
+    rectY(holds, { ...place, fill: colour("blue"), fillOpacity: 0.35, stroke: colour("blue") }),
+    rectY(violated, { ...place, fill: colour("ink") }),
+  ];
+}
+
 function histogramChart(bins: readonly Bin[]): PlotOptions {
   const most = bins.reduce((a, { count }) => Math.max(a, count), 1);
   const domain = [Math.min(bins[0]?.low ?? 0, 0), Math.max(bins.at(-1)?.high ?? 1, 0)];
-  const bars = { x1: "low", x2: "high", y: "count", insetLeft: 0.5, insetRight: 0.5 };
+  const words = "margin (negative: violated)";
   return {
-    width: WIDTH,
-    height: HEIGHT,
-    marginLeft: 52,
-    marginRight: 14,
-    marginTop: 24,
-    marginBottom: 36,
+    ...SIZES,
     x: { domain, axis: null },
     y: { domain: [0, most * 1.05], axis: null },
     marks: [
       gridY({ ticks: 4, stroke: colour("grid"), strokeOpacity: 1 }),
-      axisX({ ticks: 6, label: "margin (negative: violated)", labelArrow: "none", labelAnchor: "center" }),
+      axisX({ ticks: 6, label: words, labelArrow: "none", labelAnchor: "center" }),
       axisY({
         ticks: 4,
         label: null,
         tickFormat: (count: number) => (Number.isInteger(count) ? `${count}` : ""),
       }),
-      rectY(
-        bins.filter(({ high }) => high > 0),
-        { ...bars, fill: colour("blue"), fillOpacity: 0.35, stroke: colour("blue") },
-      ),
-      rectY(
-        bins.filter(({ high }) => high <= 0),
-        { ...bars, fill: colour("ink") },
-      ),
+      ...barMarks(bins),
       ruleX([0], strokeOf("limit")),
       text(["runs"], { frameAnchor: "top-left", dy: -14, fontWeight: 600, fill: colour("ink") }),
     ],
@@ -60,8 +64,8 @@ export function histogramPicture(id: string, title: string, margins: MarginDistr
     id,
     title,
     description: "Number of random runs over their margin. The table below gives the same counts.",
-    width: WIDTH,
-    height: HEIGHT,
+    width: SIZES.width,
+    height: SIZES.height,
     charts: [drawChart(histogramChart(binsOf(margins.histogram)), id)],
   };
 }

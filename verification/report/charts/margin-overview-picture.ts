@@ -1,15 +1,21 @@
-import { axisX, axisY, dot, gridX, type PlotOptions, ruleX, ruleY, tickX } from "@observablehq/plot";
+import {
+  axisX,
+  axisY,
+  dot,
+  gridX,
+  type Markish,
+  type PlotOptions,
+  ruleX,
+  ruleY,
+  tickX,
+} from "@observablehq/plot";
 import type { RequirementResult } from "../../evidence.ts";
 import { drawChart } from "./draw-chart.ts";
 import { strokeOf } from "./marks.ts";
 import { colour } from "./palette.ts";
 import type { Picture } from "./picture.ts";
 
-const WIDTH = 760;
-const LEFT = 250;
-const RIGHT = 16;
-const TOP = 28;
-const BOTTOM = 36;
+const SIZES = { width: 760, marginLeft: 250, marginRight: 16, marginTop: 28, marginBottom: 36 } as const;
 const ROW = 20;
 const LONGEST_LABEL = 38;
 
@@ -37,54 +43,52 @@ function rowOf(result: RequirementResult, i: number): Row[] {
   return [{ key: String(i), label, least, low: p05, median, high: p95 }];
 }
 
+function rowMarks(rows: readonly Row[]): Markish[] {
+  return [
+    ruleY(rows, {
+      y: "key",
+      x1: "low",
+      x2: "high",
+      stroke: colour("blue"),
+      strokeWidth: 5,
+      strokeOpacity: 0.5,
+    }),
+    tickX(rows, {
+      y: "key",
+      x: "median",
+      stroke: colour("ink"),
+      strokeWidth: 2,
+      insetTop: 3,
+      insetBottom: 3,
+    }),
+    dot(rows, {
+      y: "key",
+      x: "least",
+      r: 4,
+      symbol: "diamond",
+      fill: (row: Row) => (row.least < 0 ? colour("ink") : colour("paper")),
+      stroke: colour("ink"),
+      strokeWidth: 1.4,
+    }),
+  ];
+}
+
 function overviewChart(rows: readonly Row[], height: number): PlotOptions {
   const least = rows.reduce((a, row) => Math.min(a, row.least), 0);
   const most = rows.reduce((a, row) => Math.max(a, row.high), 1);
   const labels = new Map(rows.map(({ key, label }) => [key, label]));
+  const words = "margin (0: the edge, negative: violated)";
   return {
-    width: WIDTH,
+    ...SIZES,
     height,
-    marginLeft: LEFT,
-    marginRight: RIGHT,
-    marginTop: TOP,
-    marginBottom: BOTTOM,
     x: { domain: [least - 0.05 * (most - least), most], axis: null },
     y: { domain: rows.map(({ key }) => key), type: "band", padding: 0.2, axis: null },
     marks: [
       gridX({ ticks: 8, stroke: colour("grid"), strokeOpacity: 1 }),
-      axisX({
-        ticks: 8,
-        label: "margin (0: the edge, negative: violated)",
-        labelArrow: "none",
-        labelAnchor: "center",
-      }),
+      axisX({ ticks: 8, label: words, labelArrow: "none", labelAnchor: "center" }),
       axisY({ label: null, tickSize: 0, tickFormat: (key: string) => labels.get(key) ?? "" }),
       ruleX([0], strokeOf("limit")),
-      ruleY(rows, {
-        y: "key",
-        x1: "low",
-        x2: "high",
-        stroke: colour("blue"),
-        strokeWidth: 5,
-        strokeOpacity: 0.5,
-      }),
-      tickX(rows, {
-        y: "key",
-        x: "median",
-        stroke: colour("ink"),
-        strokeWidth: 2,
-        insetTop: 3,
-        insetBottom: 3,
-      }),
-      dot(rows, {
-        y: "key",
-        x: "least",
-        r: 4,
-        symbol: "diamond",
-        fill: (row: Row) => (row.least < 0 ? colour("ink") : colour("paper")),
-        stroke: colour("ink"),
-        strokeWidth: 1.4,
-      }),
+      ...rowMarks(rows),
     ],
   };
 }
@@ -96,12 +100,12 @@ export function marginOverviewPicture(
 ): Picture | undefined {
   const rows = results.flatMap(rowOf);
   if (rows.length === 0) return undefined;
-  const height = TOP + BOTTOM + rows.length * ROW;
+  const height = SIZES.marginTop + SIZES.marginBottom + rows.length * ROW;
   return {
     id,
     title: "Margins of all requirements",
     description: "One row per requirement and scenario. The requirement table gives the same values.",
-    width: WIDTH,
+    width: SIZES.width,
     height,
     charts: [drawChart(overviewChart(rows, height), id)],
   };
