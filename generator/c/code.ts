@@ -4,15 +4,21 @@ import { helpersFor, usedOperators } from "../print/helpers.ts";
 import { type Names, namesOf } from "../print/names.ts";
 import { hexFloat, isExactDecimal, shortestDecimal } from "../print/numbers.ts";
 import { effectsOf } from "../validate/effects.ts";
-import { cRealLiteral, cType } from "./dialect.ts";
+import { cRealLiteral } from "./dialect.ts";
 import { printFunction } from "./function.ts";
 import { cHelpers, NEEDS_MATH } from "./spelling.ts";
 import { banner, section } from "./text.ts";
 
 /** Refuses, when compiled, every build that could round otherwise; measured against gcc and clang, x86 and Arm. */
 const assumptions = (program: Program): readonly string[] => {
-  const [digits, name] =
-    program.precision === "float32" ? ["FLT_MANT_DIG != 24", "binary32"] : ["DBL_MANT_DIG != 53", "binary64"];
+  const [prefix, digits, exponent] = program.precision === "float32" ? ["FLT", 24, 128] : ["DBL", 53, 1024];
+  const wanted = (macro: string, value: number | string): readonly string[] => [
+    `#if defined(${macro})`,
+    `#if (${macro} != ${value})`,
+    `#error "${program.name} needs IEEE 754 arithmetic: ${macro} must be ${value}"`,
+    "#endif",
+    "#endif",
+  ];
   return [
     "#if defined(__FAST_MATH__)",
     `#error "build ${program.name} without -ffast-math and with -ffp-contract=off"`,
@@ -27,9 +33,9 @@ const assumptions = (program: Program): readonly string[] => {
     "#elif (FLT_EVAL_METHOD != 0)",
     `#error "${program.name} must be evaluated without extra precision"`,
     "#endif",
-    `#if (FLT_RADIX != 2) || (${digits})`,
-    `#error "${program.name} needs IEEE 754 ${name}"`,
-    "#endif",
+    ...wanted("FLT_RADIX", 2),
+    ...wanted(`${prefix}_MANT_DIG`, digits),
+    ...wanted(`${prefix}_MAX_EXP`, exponent),
     "/* No fused multiply-add, which rounds once where two roundings are meant. gcc ignores the standard pragma. */",
     "#if defined(__clang__)",
     "#pragma STDC FP_CONTRACT OFF",
@@ -55,7 +61,7 @@ const printConstant = (
       : `${hexFloat(value)}${suffix}`;
   const short = isReal ? shortestDecimal(value, program.precision) : String(value);
   const comment = commentText([`${short}${unit === undefined ? "" : ` ${unit}`}`, ...doc].join("; "));
-  return `static const ${cType(names, type, program.precision)} ${names.constant(name)} = ${text}; /* ${comment} */`;
+  return `#define ${names.constant(name)} (${text}) /* ${comment} */`;
 };
 
 /** `<name>.c`: code only; the only values are the periods and constants of the runtime. */

@@ -51,7 +51,7 @@ const printField = (
 
 const printStruct = (program: Program, names: Names, struct: Struct): readonly string[] => [
   "",
-  ...blockComment(struct.doc.length > 0 ? struct.doc : [ROLE[struct.role]], ""),
+  ...blockComment(struct.doc, ""),
   "typedef struct {",
   ...struct.fields.flatMap((field) => printField(program, names, struct, field)),
   `} ${names.struct(struct.name)};`,
@@ -76,7 +76,7 @@ const printPrototypes = (program: Program, names: Names): readonly string[] => {
 };
 
 const cautionLines = (program: Program): readonly string[] =>
-  program.cautions.length === 0 ? [] : ["", ...blockComment(["CAUTION", ...program.cautions], "")];
+  program.cautions.length === 0 ? [] : ["", ...blockComment(["CAUTION:", ...program.cautions], "")];
 
 /** `<name>.h`: the contract. */
 export const printHeader = (program: Program): string => {

@@ -12,14 +12,12 @@ export const banner = (
   what: string,
   more: readonly string[],
 ): readonly string[] => {
-  const lines = commentLines(
-    [
-      `${file} - ${what}`,
-      commentText(program.description),
-      `Generated from ${commentText(program.source)}, meaning ${program.meaning}. Edit that file instead of this one.`,
-      ...more,
-    ],
-    104,
-  );
+  const sentences = [
+    `${file} - ${what}`,
+    commentText(program.description),
+    `Generated from ${commentText(program.source)}, meaning ${program.meaning}. Edit that file instead of this one.`,
+    ...more,
+  ];
+  const lines = sentences.flatMap((sentence) => commentLines([sentence], 104));
   return [...lines.map((line, i) => `${i === 0 ? "/*" : " *"} ${line}`.trimEnd()), " */"];
 };

@@ -1,29 +1,31 @@
 import { rounding } from "../interpret/operations.ts";
-import { COUNT, type Expression, type Place, REAL } from "../ir/expression.ts";
+import { type Argument, COUNT, type Expression, type Place, REAL, type ValueType } from "../ir/expression.ts";
 import type { FunctionDefinition, Program } from "../ir/program.ts";
 import type { Statement } from "../ir/statement.ts";
 import { eachCallOf } from "../ir/walk.ts";
 import { type Layout, layoutOf } from "../layout/layout.ts";
 import { type Leaf, leavesOf } from "../layout/leaves.ts";
-import type { CalibrationInfo } from "../lowered.ts";
+import type { CalibrationInfo, Precision } from "../lowered.ts";
 import { CHECK_CALIBRATION } from "../print/names.ts";
 import {
-  apply,
   assign,
+  BAD_ARRAY,
+  BAD_AXIS,
+  BAD_COUNT,
+  BAD_REAL,
+  badArray,
+  badAxis,
+  badCount,
+  badReal,
   built,
   count,
   declare,
-  FIRST_NOT_RISING,
-  FIRST_OUTSIDE,
-  firstNotRising,
-  firstOutside,
   local,
-  outside,
   real,
-  when,
 } from "./first-bad.ts";
 
 const LARGEST = { float32: 2 ** 127 * (2 - 2 ** -23), float64: Number.MAX_VALUE } as const;
+const LARGEST_COUNT = 2 ** 24;
 const ROOT = "calibration";
 const bad = local("bad", COUNT);
 
@@ -40,46 +42,50 @@ const placeOf = (layout: Layout, leaf: Leaf): Place => {
   return { root: ROOT, fields };
 };
 
-const callOn = (name: string, leaf: Leaf, place: Place, extra: readonly Expression[]): Statement =>
+const callOn = (name: string, value: Argument, bounds: readonly Expression[], index: number): Statement =>
   assign("bad", {
     kind: "call",
     function: name,
     arguments: [
-      { kind: "array", place, size: leaf.type.kind === "array" ? leaf.type.size : 0 },
-      ...[...extra, count(leaf.index), bad].map((value) => ({ kind: "value", value }) as const),
+      value,
+      ...[...bounds, count(index), bad].map((each) => ({ kind: "value", value: each }) as const),
     ],
     type: COUNT,
     origin: built,
   });
 
-const checkOf = (
+const fieldValue = (place: Place, type: ValueType): Argument => ({
+  kind: "value",
+  value: { kind: "field", place, type, origin: built },
+});
+
+const checksOf = (
   leaf: Leaf,
   place: Place,
   info: CalibrationInfo | undefined,
-  round: (exact: number) => number,
-  largest: number,
+  precision: Precision,
 ): readonly Statement[] => {
-  const [low, high] = [round(info?.low ?? -largest), round(info?.high ?? largest)];
-  const isBounded = info?.low !== undefined || info?.high !== undefined;
-  const set = assign("bad", count(leaf.index));
+  const round = rounding(precision);
+  const [low, high] = [round(info?.low ?? -LARGEST[precision]), round(info?.high ?? LARGEST[precision])];
   switch (leaf.type.kind) {
-    case "array":
-      // Later statements win, so the order of an axis is looked at before its values.
+    case "array": {
+      const array: Argument = { kind: "array", place, size: leaf.type.size };
       return [
-        ...(info?.increasing ? [callOn(FIRST_NOT_RISING, leaf, place, [])] : []),
-        callOn(FIRST_OUTSIDE, leaf, place, [real(low), real(high)]),
-      ];
-    case "real": {
-      const value: Expression = { kind: "field", place, type: REAL, origin: built };
-      return [
-        when(isBounded ? outside(value, real(low), real(high)) : apply("not", apply("isFinite", value)), set),
+        callOn(BAD_ARRAY, array, [real(low), real(high)], leaf.index),
+        ...(info?.increasing ? [callOn(BAD_AXIS, array, [], leaf.index)] : []),
       ];
     }
-    case "count": {
-      const value: Expression = { kind: "field", place, type: COUNT, origin: built };
-      const [least, most] = [count(info?.low ?? 0), count(info?.high ?? 2 ** 24)];
-      return [when(apply("or", apply("lessCount", value, least), apply("greaterCount", value, most)), set)];
-    }
+    case "real":
+      return [callOn(BAD_REAL, fieldValue(place, REAL), [real(low), real(high)], leaf.index)];
+    case "count":
+      return [
+        callOn(
+          BAD_COUNT,
+          fieldValue(place, COUNT),
+          [count(info?.low ?? 0), count(info?.high ?? LARGEST_COUNT)],
+          leaf.index,
+        ),
+      ];
     default:
       return [];
   }
@@ -95,39 +101,23 @@ export const addCalibrationCheck = (program: Program): Program => {
   if (program.calibrationStruct === undefined) {
     return program;
   }
-  const round = rounding(program.precision);
-  const checks = leavesOf(layout, program.calibrationStruct)
-    .map((leaf) => {
-      const info = program.calibrationInfo[leaf.runtime.join(".")];
-      return checkOf(leaf, placeOf(layout, leaf), info, round, LARGEST[program.precision]);
-    })
-    .reverse()
-    .flat();
-  const [first, ...others] = checks;
+  const checks = leavesOf(layout, program.calibrationStruct).flatMap((leaf) => {
+    const info = program.calibrationInfo[leaf.runtime.join(".")];
+    return checksOf(leaf, placeOf(layout, leaf), info, program.precision);
+  });
   const check: FunctionDefinition = {
     name: CHECK_CALIBRATION,
     parameters: [{ name: ROOT, type: { kind: "struct", name: program.calibrationStruct } }],
     returns: COUNT,
     doc: ["Looks at every calibration value: finite, within its range, axes rising."],
     at: built.runtime,
-    body: [
-      declare("bad", COUNT, count(-1)),
-      ...(first === undefined
-        ? []
-        : [
-            {
-              ...first,
-              comments: ["From the last value to the first, so that the first bad one is reported."],
-            },
-          ]),
-      ...others,
-    ],
+    body: [declare("bad", COUNT, count(-1)), ...checks],
     result: bad,
     resultComments: [],
   };
   const called = new Set<string>();
   eachCallOf(check, (call) => called.add(call.function));
-  const helpers = [firstOutside, firstNotRising].filter(({ name }) => called.has(name));
+  const helpers = [badReal, badCount, badArray, badAxis].filter(({ name }) => called.has(name));
   return {
     ...program,
     functions: [...helpers, ...program.functions, check],

@@ -8,20 +8,21 @@ import {
   type ValueType,
 } from "../ir/expression.ts";
 import { OPERATORS, type OperatorName } from "../ir/operators.ts";
-import type { FunctionDefinition } from "../ir/program.ts";
+import type { FunctionDefinition, Parameter } from "../ir/program.ts";
 import type { Statement } from "../ir/statement.ts";
 
 // Code of the calibration check that does not depend on the spec, as IR, so that every target gets the same.
 
-export const FIRST_OUTSIDE = "firstOutside";
-export const FIRST_NOT_RISING = "firstNotRising";
+export const BAD_REAL = "badReal";
+export const BAD_COUNT = "badCount";
+export const BAD_ARRAY = "badArray";
+export const BAD_AXIS = "badAxis";
 
 const BUILT = { file: "generator/calibration/first-bad.ts", line: 1, column: 1, endLine: 1, endColumn: 1 };
 export const built: Origin = { runtime: BUILT };
 
 export const count = (value: number): Expression => ({ kind: "count", value, type: COUNT, origin: built });
 export const real = (value: number): Expression => ({ kind: "real", value, type: REAL, origin: built });
-const flag = (value: boolean): Expression => ({ kind: "flag", value, type: FLAG, origin: built });
 export const local = (name: string, type: ValueType): Expression => ({
   kind: "local",
   name,
@@ -75,56 +76,96 @@ const i = local("i", COUNT);
 export const outside = (value: Expression, low: Expression, high: Expression): Expression =>
   apply("not", apply("and", apply("greaterEqual", value, low), apply("lessEqual", value, high)));
 
+const SO_FAR = "soFar";
+const soFar = local(SO_FAR, COUNT);
+const isGoodYet = (name: string) => apply("lessCount", local(name, COUNT), count(0));
+
+const definition = (
+  name: string,
+  doc: string,
+  parameters: readonly Parameter[],
+  body: readonly Statement[],
+  result: Expression,
+): FunctionDefinition => ({
+  name,
+  parameters: [...parameters, { name: "index", type: COUNT }, { name: SO_FAR, type: COUNT }],
+  returns: COUNT,
+  doc: [doc],
+  at: BUILT,
+  body,
+  result,
+  resultComments: [],
+});
+
+const single = (name: string, type: ValueType, bad: Expression): FunctionDefinition =>
+  definition(
+    name,
+    "The index when the value is the first bad one: not a number, or outside low .. high.",
+    ["value", "low", "high"].map((each) => ({ name: each, type })),
+    [],
+    apply("selectCount", apply("and", isGoodYet(SO_FAR), bad), local("index", COUNT), soFar),
+  );
+
+export const badReal = single(
+  BAD_REAL,
+  REAL,
+  outside(local("value", REAL), local("low", REAL), local("high", REAL)),
+);
+
+export const badCount = single(
+  BAD_COUNT,
+  COUNT,
+  apply(
+    "or",
+    apply("lessCount", local("value", COUNT), local("low", COUNT)),
+    apply("greaterCount", local("value", COUNT), local("high", COUNT)),
+  ),
+);
+
 const search = (
   name: string,
   doc: string,
   from: number,
-  bad: Expression,
-  extra: readonly string[],
-): FunctionDefinition => ({
-  name,
-  parameters: [
-    { name: "values", type: { kind: "array", counted: true } },
-    ...extra.map((each) => ({ name: each, type: REAL })),
-    { name: "offset", type: COUNT },
-    { name: "otherwise", type: COUNT },
-  ],
-  returns: COUNT,
-  doc: [doc],
-  at: BUILT,
-  body: [
-    declare("bad", COUNT, local("otherwise", COUNT)),
-    declare("found", FLAG, flag(false)),
-    {
-      kind: "for",
-      variable: "i",
-      from: count(from),
-      below: { kind: "length", place: VALUES, type: COUNT, origin: built },
-      body: [
-        when(
-          apply("and", apply("not", local("found", FLAG)), bad),
-          assign("bad", apply("addCount", local("offset", COUNT), i)),
-          assign("found", flag(true)),
-        ),
-      ],
-      ...common,
-    },
-  ],
-  result: local("bad", COUNT),
-  resultComments: [],
-});
+  isBad: Expression,
+  bounds: readonly Parameter[],
+): FunctionDefinition =>
+  definition(
+    name,
+    doc,
+    [{ name: "values", type: { kind: "array", counted: true } }, ...bounds],
+    [
+      declare("bad", COUNT, soFar),
+      {
+        kind: "for",
+        variable: "i",
+        from: count(from),
+        below: { kind: "length", place: VALUES, type: COUNT, origin: built },
+        body: [
+          when(
+            apply("and", isGoodYet("bad"), isBad),
+            assign("bad", apply("addCount", local("index", COUNT), i)),
+          ),
+        ],
+        ...common,
+      },
+    ],
+    local("bad", COUNT),
+  );
 
-export const firstOutside: FunctionDefinition = search(
-  FIRST_OUTSIDE,
-  "Index of the first value outside low .. high or not a number, counted from offset; else otherwise.",
+export const badArray: FunctionDefinition = search(
+  BAD_ARRAY,
+  "As bad_real, for an array whose first value has the index.",
   0,
   outside(at(i), local("low", REAL), local("high", REAL)),
-  ["low", "high"],
+  [
+    { name: "low", type: REAL },
+    { name: "high", type: REAL },
+  ],
 );
 
-export const firstNotRising: FunctionDefinition = search(
-  FIRST_NOT_RISING,
-  "Index of the first value not greater than the one before it, counted from offset; else otherwise.",
+export const badAxis: FunctionDefinition = search(
+  BAD_AXIS,
+  "Index of the first value of an axis that is not greater than the one before it.",
   1,
   apply("not", apply("greater", at(i), at(apply("subtractCount", i, count(1))))),
   [],

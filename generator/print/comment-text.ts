@@ -1,3 +1,5 @@
+import { snakeCase } from "./identifiers.ts";
+
 const LONGEST_COMMENT = 400;
 
 const PLAIN: Readonly<Record<string, string>> = {
@@ -39,15 +41,25 @@ export const commentText = (text: string): string => {
   return harmless.length > LONGEST_COMMENT ? `${harmless.slice(0, LONGEST_COMMENT - 3)}...` : harmless;
 };
 
+const indentOf = (text: string): number => text.length - text.trimStart().length;
+
+/** Source lines are about 118 wide: an indented line that long was broken there, a shorter one ended. */
+const BROKEN_LINE = 95;
+
+const runsOn = (before: string, text: string): boolean => {
+  const isProse = /^\S/.test(before) && /^[^\s-]/.test(text) && !/[.:]$/.test(before);
+  return (
+    isProse || (before.length >= BROKEN_LINE && indentOf(before) === indentOf(text) && indentOf(text) > 0)
+  );
+};
+
 /** Lines of running text joined into paragraphs; indented lines (equations) and those after an empty one stand alone. */
 const paragraphs = (texts: readonly string[]): readonly string[] => {
   const joined: string[] = [];
   for (const text of texts) {
     const before = joined[joined.length - 1];
-    const runsOn =
-      before !== undefined && /^\S/.test(before) && /^[^\s-]/.test(text) && !/[.:]$/.test(before);
-    if (runsOn) {
-      joined[joined.length - 1] = `${before} ${text}`;
+    if (before !== undefined && runsOn(before, text)) {
+      joined[joined.length - 1] = `${before} ${text.trim()}`;
     } else {
       joined.push(text);
     }
@@ -73,9 +85,13 @@ export const commentLines = (texts: readonly string[], width: number): readonly 
     return [...lines, (indent + line).trimEnd()];
   });
 
+/** Names of the runtime in backquotes, as they are printed. */
+const printedNames = (text: string): string =>
+  text.replace(/`([a-z][A-Za-z0-9]*)`/g, (_, name: string) => `\`${snakeCase(name)}\``);
+
 /** A block comment on as many lines as it needs, indented as the code it stands above. */
 export const blockComment = (texts: readonly string[], indent: string): readonly string[] => {
-  const lines = commentLines(texts, 104 - indent.length);
+  const lines = commentLines(texts.map(printedNames), 104 - indent.length);
   if (lines.length === 0) {
     return [];
   }

@@ -1,7 +1,7 @@
 const C_KEYWORDS =
   "auto break case char const continue default do double else enum extern float for goto if inline int long register " +
   "restrict return short signed sizeof static struct switch typedef union unsigned void volatile while bool true false " +
-  "asm main errno signal near far";
+  "asm main errno signal";
 const TYPESCRIPT_KEYWORDS =
   "arguments as async await boolean case catch class const debugger declare delete enum eval export extends finally " +
   "function get global implements import in instanceof interface is keyof let module namespace never new null number " +

@@ -36,7 +36,7 @@ const printIf = (
   return [
     ...wrap(`${indent}${before}if (${condition}) {`),
     ...printBody(around, negated ? whenFalse : whenTrue, indent + STEP),
-    ...printElse(around, negated ? [] : whenFalse, indent),
+    ...printElse(around, negated ? [] : whenFalse, indent, before !== ""),
   ];
 };
 
@@ -44,9 +44,17 @@ const printIf = (
 const continues = (body: readonly Statement[]): body is readonly [IfStatement] =>
   body.length === 1 && body[0].kind === "if" && body[0].comments.length === 0;
 
-const printElse = (around: Surroundings, body: readonly Statement[], indent: string): readonly string[] => {
+/** A chain of `else if` ends with an `else`, so that a reader sees that nothing was forgotten. */
+const printElse = (
+  around: Surroundings,
+  body: readonly Statement[],
+  indent: string,
+  isChain: boolean,
+): readonly string[] => {
   if (body.length === 0) {
-    return [`${indent}}`];
+    return isChain
+      ? [`${indent}} else {`, `${indent}${STEP}/* nothing to do */`, `${indent}}`]
+      : [`${indent}}`];
   }
   return continues(body)
     ? printIf(around, body[0], indent, "} else ")

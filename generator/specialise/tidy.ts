@@ -1,9 +1,10 @@
 import type { Expression } from "../ir/expression.ts";
 import type { FunctionDefinition } from "../ir/program.ts";
 import type { LocalStatement, Statement } from "../ir/statement.ts";
-import { eachExpression, eachExpressionOf, eachStatement } from "../ir/walk.ts";
+import { eachExpressionOf, eachStatement } from "../ir/walk.ts";
 import { type Effects, isPure } from "../validate/effects.ts";
 import { mapFunction } from "./map-function.ts";
+import { tidySequence } from "./tidy-sequence.ts";
 
 interface Uses {
   readonly reads: ReadonlyMap<string, number>;
@@ -30,41 +31,6 @@ const usesOf = (definition: FunctionDefinition): Uses => {
     }
   });
   return { reads, writes, declared };
-};
-
-const reads = (expression: Expression, name: string): boolean => {
-  let found = false;
-  eachExpression(expression, (each) => {
-    found ||= each.kind === "local" && each.name === name;
-  });
-  return found;
-};
-
-const isAssignedNext = (
-  local: LocalStatement,
-  next: Statement | undefined,
-): next is Statement & { kind: "assign" } =>
-  next?.kind === "assign" &&
-  next.target.kind === "local" &&
-  next.target.name === local.name &&
-  !reads(next.value, local.name);
-
-/** `let x = a; x = b;` becomes `let x = b;`: what a chosen branch leaves behind. */
-const joined = (body: readonly Statement[], effects: Effects): readonly Statement[] => {
-  const out: Statement[] = [];
-  for (const statement of body) {
-    const before = out[out.length - 1];
-    if (before?.kind === "local" && isPure(before.value, effects) && isAssignedNext(before, statement)) {
-      out[out.length - 1] = {
-        ...before,
-        value: statement.value,
-        comments: [...before.comments, ...statement.comments],
-      };
-    } else {
-      out.push(statement);
-    }
-  }
-  return out;
 };
 
 const tidyStatement = (statement: Statement, uses: Uses, effects: Effects): readonly Statement[] => {
@@ -111,7 +77,7 @@ const tidyLocal = (local: LocalStatement, uses: Uses, effects: Effects): readonl
 };
 
 const tidyBody = (body: readonly Statement[], uses: Uses, effects: Effects): readonly Statement[] =>
-  joined(
+  tidySequence(
     body.flatMap((each) => tidyStatement(each, uses, effects)),
     effects,
   );
