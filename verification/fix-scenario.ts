@@ -1,4 +1,4 @@
-import type { DrawnScenario, FixedCourse, FixedFault } from "../hil-sim/index.ts";
+import { type DrawnScenario, FAULT_KINDS, type FixedCourse, type FixedFault } from "../hil-sim/index.ts";
 import type { Course, FaultSpec, Free, ScenarioSpec } from "../spec/scenario-spec.ts";
 
 /** A place in a scenario that takes a number: its name in counterexamples, and its range. */
@@ -8,8 +8,8 @@ export interface FreeValue {
   readonly base: BaseUnit;
 }
 
-/** What the numbers of a place are in: the base units of spec and traces. */
-export type BaseUnit = "s" | "rpm" | "kPa abs" | "K" | "m" | "ratio" | "fault";
+/** What the numbers of a place are in: the base units of spec, traces and faults. */
+export type BaseUnit = "s" | "rpm" | "kPa abs" | "K" | "m" | "m2" | "ratio";
 
 export type Pick = (value: FreeValue) => number;
 
@@ -85,7 +85,14 @@ function fixFault(name: string, fault: FaultSpec, pick: Pick): FixedFault {
     : Number.POSITIVE_INFINITY;
   const values: Record<string, number> = {};
   for (const [key, free] of Object.entries(fault.values)) {
-    values[key] = pick({ name: `${name}.${key}`, free, base: "fault" });
+    values[key] = pick({ name: `${name}.${key}`, free, base: faultUnit(fault.kind, key) });
   }
   return { kind: fault.kind, from, lasting, values };
+}
+
+/** The unit that hil-sim takes a fault's field in; a plain factor is a ratio. */
+function faultUnit(kind: string, field: string): BaseUnit {
+  const kinds: Readonly<Record<string, { readonly fields: Readonly<Record<string, string>> }>> = FAULT_KINDS;
+  const unit = kinds[kind]?.fields[field];
+  return unit === undefined || unit === "1" ? "ratio" : (unit as BaseUnit);
 }
