@@ -40,8 +40,10 @@ function speedLine(parameters: PlantParameters, rpm: number): MapPoint[] {
   const from = peakFlow(parameters, ratio);
   const to = chokeFlow(parameters, ratio);
   return Array.from({ length: POINTS }, (_, k) => {
-    const q = k / (POINTS - 1);
-    const height = Math.sqrt(1 - q * q);
+    // The quarter circle q² + height² = 1 by its rational parameter: even steps along it, steep ends included.
+    const t = k / (POINTS - 1);
+    const q = (2 * t) / (1 + t * t);
+    const height = (1 - t * t) / (1 + t * t);
     return [significant(from + (to - from) * q), significant(choke + height * (peak - choke))] as const;
   });
 }
