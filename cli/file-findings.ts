@@ -21,30 +21,13 @@ export const FILE_CODES: Readonly<Record<string, Explanation>> = {
     example: "spoolwright check /dev/zero",
     fix: "Check the permissions, or save the text to a file first.",
   },
-  "csv-format": {
+  "bad-inputs": {
     severity: "error",
     cause:
-      "The file is not comma-separated text with a header line and the same number of fields in every line.",
-    example: "time_s,engine_speed_rpm\n0,3000,1",
-    fix: "Write one header line, then one line per row with a field for each column.",
-  },
-  "csv-missing-column": {
-    severity: "error",
-    cause: "A column that the open-loop run needs is not in the header. The names carry the unit.",
-    example: "time_s,engine_speed",
-    fix: "Name the column as the message says, for example `engine_speed_rpm`, and give it in that unit.",
-  },
-  "csv-value": {
-    severity: "error",
-    cause: "A field is not a number, or not one that this column can have; often it is in another unit.",
+      "A row of the inputs file cannot be used: a column is missing, a field is not a number or not in the unit that " +
+      "the column's name says, or time does not go forward.",
     example: "ambient_pressure_kpa\n101325",
-    fix: "Convert the column to the unit in its name: `101.325`.",
-  },
-  "csv-time-order": {
-    severity: "error",
-    cause: "The time of a row does not come after the time of the row before it.",
-    example: "time_s\n0\n0.5\n0.4",
-    fix: "Sort the rows by time and remove doubles.",
+    fix: "Correct the field that the message names: `101.325`.",
   },
 };
 
