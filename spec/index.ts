@@ -1,8 +1,12 @@
 // The door of spec: YAML text in, checked specs or diagnostics out. No disk, no clock.
 export type * from "./controller-spec.ts";
 export type { Diagnostic, Severity } from "./diagnostic.ts";
-export { CATALOGUE, explain } from "./diagnostics/catalogue.ts";
+export { CATALOGUE, type Code, explain } from "./diagnostics/catalogue.ts";
+export type { Explanation } from "./diagnostics/explanation.ts";
+export { diagnosticsJson, type JsonDiagnostics } from "./diagnostics/json.ts";
+export { type RenderOptions, renderDiagnostics } from "./diagnostics/render.ts";
 export type { LoopSpec } from "./loop-spec.ts";
+export { campaignMeaningText, meaningText, plantMeaningText } from "./meaning.ts";
 export type { PlantSpec, PressureSensorSpec, TemperatureSensorSpec } from "./plant-spec.ts";
 export type { CurveSpec, Duration, Quantity, Range, TableSpec } from "./quantity.ts";
 export { type LoopResult, readLoopSpec } from "./read-loop-spec.ts";
@@ -10,5 +14,9 @@ export { type PlantResult, readPlant } from "./read-plant.ts";
 export type { Comparison, Pattern, RequirementSpec, TraceSignal } from "./requirement-spec.ts";
 export { TRACE_SIGNALS } from "./requirement-spec.ts";
 export type { Course, CoursePoint, EngineSpeedSpec, FaultSpec, Free, ScenarioSpec } from "./scenario-spec.ts";
+export { jsonSchema } from "./schema/json-schema.ts";
+export { printSchema } from "./schema/print-schema.ts";
 export type { Span } from "./span.ts";
+export { FAULTS, type FaultKindName } from "./table/fault-table.ts";
+export { type DecodeResult, decodeSource } from "./text/decode.ts";
 export type { OpenNeighbour, Source } from "./text/source.ts";

@@ -34,11 +34,22 @@ export function readLoopSpec(source: Source, openNeighbour: OpenNeighbour): Loop
   if (root === undefined) return { diagnostics: findings.sorted() };
   const context = { report: findings.report, choices: choicesOf(root) };
   const read = readFile(root, LOOP_FILE, context);
-  const plant = readNeighbour(read, openNeighbour, findings);
-  if (read.plant !== undefined && typeof read.plant !== "string") checkPlant(read.plant, findings.report);
-  checkLoop(read, plant, findings.report);
+  const plant =
+    typeof read.plant === "object"
+      ? inlinePlant(read.plant, findings)
+      : readNeighbour(read, openNeighbour, findings);
+  checkLoop(read, root, plant, findings.report);
   const spec = findings.anyError() ? undefined : assemble(source.file, read as WholeLoop, plant);
   return { ...(spec === undefined ? {} : { spec }), diagnostics: findings.sorted() };
+}
+
+type HoledPlant = Extract<HoledLoop["plant"], object>;
+
+function inlinePlant(read: HoledPlant, findings: Findings): PlantSpec | undefined {
+  checkPlant(read, findings.report);
+  return findings.anyErrorWithin(read.span)
+    ? undefined
+    : assemblePlant(read as Extract<WholeLoop["plant"], object>);
 }
 
 function readNeighbour(read: HoledLoop, open: OpenNeighbour, findings: Findings): PlantSpec | undefined {
@@ -67,9 +78,7 @@ function readNeighbour(read: HoledLoop, open: OpenNeighbour, findings: Findings)
   return undefined;
 }
 
-function assemble(file: string, read: WholeLoop, neighbour: PlantSpec | undefined): LoopSpec {
-  const inline = typeof read.plant === "object" ? assemblePlant(read.plant) : undefined;
-  const plant = inline ?? neighbour;
+function assemble(file: string, read: WholeLoop, plant: PlantSpec | undefined): LoopSpec {
   return {
     file,
     controller: assembleController(read.controller),

@@ -30,7 +30,14 @@ export interface Findings {
   /** Everything reported, sorted by place, each finding once. */
   readonly sorted: () => readonly Diagnostic[];
   readonly anyError: () => boolean;
+  /** An error that starts inside a span. */
+  readonly anyErrorWithin: (span: Span) => boolean;
 }
+
+const isInside = (at: Span, outer: Span): boolean =>
+  at.file === outer.file &&
+  (at.line > outer.line || (at.line === outer.line && at.column >= outer.column)) &&
+  (at.line < outer.endLine || (at.line === outer.endLine && at.column <= outer.endColumn));
 
 const identity = (d: Diagnostic): string => `${d.code} ${d.at.file}:${d.at.line}:${d.at.column} ${d.message}`;
 
@@ -39,10 +46,13 @@ export function collectFindings(): Findings {
   const keep = (diagnostic: Diagnostic): void => {
     if (found.size < MOST) found.set(identity(diagnostic), diagnostic);
   };
+  const errors = (): readonly Diagnostic[] =>
+    [...found.values()].filter(({ severity }) => severity === "error");
   return {
     report: (finding) => keep({ ...finding, severity: CATALOGUE[finding.code].severity }),
     include: (diagnostics) => diagnostics.forEach(keep),
     sorted: () => [...found.values()].sort(byPlace),
-    anyError: () => [...found.values()].some((each) => each.severity === "error"),
+    anyError: () => errors().length > 0,
+    anyErrorWithin: (span) => errors().some(({ at }) => isInside(at, span)),
   };
 }

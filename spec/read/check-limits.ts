@@ -21,13 +21,21 @@ export function boundOf(text: string, choice: UnitChoice): number {
   return convertQuantity(number, unit.unit, choice.base, level);
 }
 
-/** True when finite and inside the limits; else reports the first limit that is broken. */
+/** Sizes that a float32 holds with room to multiply two of them; no quantity of a boost loop is near either end. */
+const LARGEST = 1e18;
+const SMALLEST = 1e-18;
+
+const isComputable = (value: number): boolean =>
+  value === 0 || (Math.abs(value) <= LARGEST && Math.abs(value) >= SMALLEST);
+
+/** True when the value can be computed with and is inside the limits; else reports the first that is broken. */
 export function checkLimits(amount: Amount, limits: Limits, place: Place, context: Context): boolean {
-  if (!Number.isFinite(amount.value)) {
+  if (!isComputable(amount.value)) {
     context.report({
       code: "not-finite",
       at: amount.at,
-      message: `${place.name}: ${amount.written} is too large for a number of this kind`,
+      message: `${place.name}: ${amount.written} is too ${Math.abs(amount.value) < 1 ? "small" : "large"} to compute with`,
+      label: "check the exponent and the unit",
       fix: place.fix,
     });
     return false;

@@ -82,9 +82,9 @@ function refuseOthers(
     });
 }
 
-/** True when every value is above the one before it. */
+/** True when every value is above the one before it, also as a float32. */
 export function isRising(values: readonly number[], node: Node, place: Place, context: Context): boolean {
-  const bad = values.findIndex((value, i) => i > 0 && value <= values[i - 1]);
+  const bad = values.findIndex((value, i) => i > 0 && Math.fround(value) <= Math.fround(values[i - 1]));
   if (bad === -1) return true;
   const items = node.kind === "list" ? node.items : [];
   const text = (i: number): string => (items[i]?.kind === "scalar" ? items[i].text : String(values[i]));

@@ -8,6 +8,8 @@ import { refuseShape } from "./refuse-shape.ts";
 import { nearestName, orList, quote } from "./suggest.ts";
 
 type Values = Record<string, unknown>;
+/** Known keys that a misspelt key stands for, with its place: they are not reported as missing too. */
+type Meant = ReadonlyMap<string, Span>;
 
 export const camel = (name: string): string =>
   name.replace(/_([a-z0-9])/g, (_, letter: string) => letter.toUpperCase());
@@ -31,19 +33,13 @@ const exampleBlock = (name: string, keys: KeySet): string =>
     .join(", ")} }`;
 
 /** Values of the given keys, by their camel-case names, with the place of each. */
-export function readKeys(
-  node: MapNode,
-  keys: KeySet,
-  name: string,
-  meant: ReadonlySet<string>,
-  context: Context,
-): Values {
+export function readKeys(node: MapNode, keys: KeySet, name: string, meant: Meant, context: Context): Values {
   const entries = new Map(node.entries.map((entry) => [entry.key, entry]));
   const places: Record<string, Span> = {};
   const values: Values = { span: node.at, places };
   for (const [key, definition] of Object.entries(keys)) {
     const entry = entries.get(key);
-    places[key] = entry?.value.at ?? node.at;
+    places[key] = entry?.value.at ?? meant.get(key) ?? node.at;
     values[camel(key)] = readKey(key, definition, entry, { block: name, at: node.at, meant }, context);
   }
   return values;
@@ -52,8 +48,7 @@ export function readKeys(
 interface Surroundings {
   readonly block: string;
   readonly at: Span;
-  /** Known keys that a misspelt key stands for: not reported as missing too. */
-  readonly meant: ReadonlySet<string>;
+  readonly meant: Meant;
 }
 
 function readKey(
@@ -90,10 +85,10 @@ export function checkUnknown(
   kind: Pick<BlockKind, "keys" | "reserved">,
   name: string,
   context: Context,
-): ReadonlySet<string> {
+): Meant {
   const known = Object.keys(kind.keys);
   const present = new Set(node.entries.map((entry) => entry.key));
-  const meant = new Set<string>();
+  const meant = new Map<string, Span>();
   for (const { key, keyAt } of node.entries) {
     if (Object.hasOwn(kind.keys, key)) continue;
     if (kind.reserved?.includes(key)) refuseReserved(key, keyAt, context);
@@ -102,7 +97,7 @@ export function checkUnknown(
         key,
         known.filter((each) => !present.has(each)),
       );
-      if (near !== undefined) meant.add(near);
+      if (near !== undefined) meant.set(near, keyAt);
       context.report({
         code: "unknown-key",
         at: keyAt,
@@ -125,13 +120,7 @@ function refuseReserved(key: string, at: Span, context: Context): void {
   });
 }
 
-function checkOneOf(
-  node: MapNode,
-  kind: BlockKind,
-  name: string,
-  meant: ReadonlySet<string>,
-  context: Context,
-): void {
+function checkOneOf(node: MapNode, kind: BlockKind, name: string, meant: Meant, context: Context): void {
   if (kind.oneOf === undefined || kind.oneOf.some((key) => meant.has(key))) return;
   const found = node.entries.filter((entry) => kind.oneOf?.includes(entry.key));
   if (found.length === 1) return;

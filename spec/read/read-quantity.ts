@@ -109,7 +109,7 @@ export function readRange(node: Node, leaf: Leaf, place: Place, context: Context
   }
   const [low, high] = halves.map((half) => readAmount(half, leaf, place, context));
   if (low === undefined || high === undefined) return undefined;
-  if (low.value < high.value) return { low: plain(low), high: plain(high) };
+  if (Math.fround(low.value) < Math.fround(high.value)) return { low: plain(low), high: plain(high) };
   refuseOrder(low, high, "must rise from low to high", piece.at, place, context);
   return undefined;
 }

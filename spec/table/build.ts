@@ -39,8 +39,10 @@ export const temperatureLevel: UnitChoice = { base: knownUnit("K"), shown: "degC
 
 export const quantity = (units: Units, limits: Limits = {}) =>
   ({ kind: "quantity", units: many(units), limits }) as const;
+/** Longest time that is counted in steps. */
+const LONGEST: Limits = { atMost: "600 s" };
 export const duration = (limits: Limits = { atLeast: "0" }) =>
-  ({ kind: "duration", units: [amount("ms", "s")], limits }) as const;
+  ({ kind: "duration", units: [amount("ms", "s")], limits: { ...LONGEST, ...limits } }) as const;
 export const range = (units: Units, limits: Limits = {}) =>
   ({ kind: "range", units: many(units), limits }) as const;
 export const free = (units: Units, limits: Limits = {}) =>

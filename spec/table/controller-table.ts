@@ -24,6 +24,8 @@ import type { Limits, UnitChoice } from "./kind.ts";
 
 const POSITIVE: Limits = { above: "0" };
 const NOT_NEGATIVE: Limits = { atLeast: "0" };
+/** With the longest time below, counts of steps stay exact in a float32. */
+const STEP: Limits = { atLeast: "0.1 ms", atMost: "1 s" };
 const OPENING: Limits = { atLeast: "0", atMost: "100 %" };
 
 const speed = amount("rpm");
@@ -390,9 +392,9 @@ export const CONTROLLER_BLOCK = block(
   {
     name: structural(required(identifier, "prefix of all generated names", "skarn24_boost")),
     description: standard(sentence, "", "one sentence about the loop", "boost loop of an invented engine"),
-    step: structural(required(duration(POSITIVE), "period of the boost loop", "5 ms")),
+    step: structural(required(duration(STEP), "period of the boost loop", "5 ms")),
     guard_step: structural(
-      optional(duration(POSITIVE), "period of the fast task; divides `step`; absent: the same", "1 ms"),
+      optional(duration(STEP), "period of the fast task; divides `step`; absent: the same", "1 ms"),
     ),
     precision: structural(
       standard(words("float32", "float64"), "float32", "arithmetic of the generated code"),

@@ -49,20 +49,20 @@ const bounds = ({ level, distance, example }: BoundUnits) => ({
   ),
 });
 
-const BOUNDS = Object.fromEntries(
-  Object.entries(TRACE_SIGNALS).map(([signal, unit]) => [signal, bounds(BOUND_UNITS[unit])]),
-) as Record<TraceSignal, ReturnType<typeof bounds>>;
-export const COMPARISON = variants("signal", "a signal of the trace", BOUNDS);
+type Bounds = ReturnType<typeof bounds>;
+type BySignal<T> = Record<TraceSignal, T>;
 
-const WHILE = Object.fromEntries(
-  Object.entries(BOUNDS).map(([signal, keys]) => [
-    signal,
-    { ...keys, while: optional(COMPARISON, "only while this holds", "{ signal: tripped, above: 0.5 }") },
-  ]),
-) as Record<
-  TraceSignal,
-  ReturnType<typeof bounds> & { readonly while: ReturnType<typeof optional<typeof COMPARISON>> }
->;
+/** One set of keys for all signals of a unit, so that help and schema describe it once. */
+const bySignal = <T>(make: (units: BoundUnits) => T): BySignal<T> => {
+  const made = new Map(Object.entries(BOUND_UNITS).map(([unit, units]) => [unit, make(units)]));
+  const entries = Object.entries(TRACE_SIGNALS).map(([signal, unit]) => [signal, made.get(unit)]);
+  return Object.fromEntries(entries) as BySignal<T>;
+};
+
+export const COMPARISON = variants("signal", "a signal of the trace", bySignal<Bounds>(bounds));
+
+const condition = optional(COMPARISON, "only while this holds", "{ signal: tripped, above: 0.5 }");
+const WHILE = bySignal((units) => ({ ...bounds(units), while: condition }));
 
 const PATTERNS = {
   stays: optional(
