@@ -1,3 +1,4 @@
+import type { InputProblem } from "../hil-sim/index.ts";
 import type { Diagnostic, Explanation } from "../spec/index.ts";
 import type { ReadProblem } from "./files/read-limited.ts";
 
@@ -53,4 +54,10 @@ const SAYS: Readonly<
 export function fileFinding(file: string, problem: ReadProblem): Diagnostic {
   const at = { file, line: 1, column: 1, endLine: 1, endColumn: 2 };
   return { ...SAYS[problem], severity: "error", at };
+}
+
+/** A problem of an open-loop inputs file as a finding. */
+export function inputsFinding(file: string, { line, column, message, label }: InputProblem): Diagnostic {
+  const at = { file, line, column, endLine: line, endColumn: column + 1 };
+  return { code: "bad-inputs", severity: "error", at, message, label };
 }

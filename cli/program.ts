@@ -8,7 +8,6 @@ const VERSION = "0.1.0";
 /** The commands still to come, with the sentence that the help shows. */
 const PLANNED: readonly (readonly [string, string])[] = [
   ["generate", "writes the controller as TypeScript and C"],
-  ["simulate", "one run of the loop, or the plant alone"],
   ["verify", "runs the requirements against random manoeuvres"],
   ["replay", "reruns a counterexample"],
   ["tune", "computes the feedforward map from the plant"],
@@ -59,6 +58,16 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .action(async (plant: string, options: CommonOptions & { csv?: string }) => {
       const { steady } = await import("./commands/steady.ts");
       done(steady(plant, options, openSession(options)));
+    });
+
+  add(program, "simulate <file>", "one run: of a loop spec's scenario, or of a plant file alone")
+    .option("--inputs <file>", "plant alone: CSV of commands and surroundings")
+    .option("--csv <file>", "write the rows there")
+    .action(async (file: string, options: CommonOptions & { inputs?: string; csv?: string }) => {
+      const { inputs, ...rest } = options;
+      if (inputs === undefined) throw new CommandFailure("`simulate` needs --inputs FILE.csv for a plant");
+      const { simulatePlant } = await import("./commands/simulate-plant.ts");
+      done(simulatePlant(file, { inputs, ...rest }, openSession(options)));
     });
 
   for (const [name, sentence] of PLANNED) addPlanned(program, name, sentence);
