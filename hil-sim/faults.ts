@@ -2,7 +2,7 @@ import type { FixedFault } from "./drawn-scenario.ts";
 import { wholeMilliseconds } from "./milliseconds.ts";
 import type { PlantFaults } from "./plant/plant-input.ts";
 
-/** Faults of sensors and tasks in force; plant faults are separate. Stuck values kPa and rpm. */
+/** Faults of sensors and tasks in force; plant faults are separate. Stuck values kPa and rpm, NaN: at the present value. */
 export interface LoopFaults {
   boostLost: boolean;
   turboSpeedLost: boolean;
@@ -31,7 +31,7 @@ export function newLoopFaults(): LoopFaults {
 
 type Values = FixedFault["values"];
 interface FaultKind {
-  /** Names of `values` it needs, with their units. */
+  /** Names of the `values` it reads, with their units; a stuck sensor's may be absent. */
   readonly fields: Readonly<Record<string, string>>;
   readonly apply: (values: Values, loop: LoopFaults, plant: PlantFaults) => void;
 }
@@ -42,14 +42,14 @@ export const FAULT_KINDS = {
     fields: { value: "kPa abs" },
     apply: (values, loop) => {
       loop.boostStuck = true;
-      loop.boostStuckKpa = values.value;
+      loop.boostStuckKpa = values.value ?? Number.NaN;
     },
   },
   turbo_speed_stuck: {
     fields: { value: "rpm" },
     apply: (values, loop) => {
       loop.turboSpeedStuck = true;
-      loop.turboSpeedStuckRpm = values.value;
+      loop.turboSpeedStuckRpm = values.value ?? Number.NaN;
     },
   },
   boost_pressure_lost: {

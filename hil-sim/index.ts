@@ -9,6 +9,10 @@ export { exponential, naturalLog, powerOf, standardPressure } from "./exact-math
 export { FAULT_KINDS, type FaultKindName } from "./faults.ts";
 export { type LoopPlant, type LoopStart, type RunSummary, runLoop } from "./loop/run-loop.ts";
 export { startOfRun, startPoint } from "./loop/start-of-run.ts";
+export type { InputRow, OutputRow } from "./open-loop/input-row.ts";
+export { openLoopCsv } from "./open-loop/open-loop-csv.ts";
+export { INPUT_COLUMNS, type InputProblem, type InputsResult, readInputs } from "./open-loop/read-inputs.ts";
+export { type OpenLoopResult, simulateOpenLoop } from "./open-loop/simulate-open-loop.ts";
 export { inletPressure } from "./plant/air-filter.ts";
 export { chokeFlow, peakFlow, usableHead } from "./plant/compressor.ts";
 export { compressorOutletPressure } from "./plant/intercooler.ts";
@@ -30,6 +34,7 @@ export {
   type RandomState,
   randomStream,
 } from "./random.ts";
+export { applyScatter, SCATTER_SETS, type ScatterEntry, type ScatterSet, uniformScatter } from "./scatter.ts";
 export { type Equilibrium, equilibriumAt, equilibriumHolding } from "./steady/equilibrium.ts";
 export {
   type OpeningForBoost,
@@ -39,3 +44,4 @@ export {
 } from "./steady/opening-for-boost.ts";
 export type { OperatingPoint } from "./steady/operating-point.ts";
 export { newTrace, type Trace, traceCapacity } from "./trace.ts";
+export { traceHash } from "./trace-hash.ts";

@@ -184,7 +184,12 @@ function poseTarget(run: Run, target: ReadyCourse, millisecond: number): void {
 
 function changeFaults(run: Run, millisecond: number): void {
   const time = millisecond / 1000;
-  applyFaults(run.scenario.faults, time, run.loopFaults, run.plantFaults);
+  const { loopFaults, sensors } = run;
+  const heldKpa = loopFaults.boostStuck ? loopFaults.boostStuckKpa : sensors.boost.readingKpa;
+  const heldRpm = loopFaults.turboSpeedStuck ? loopFaults.turboSpeedStuckRpm : sensors.turboSpeed.readingRpm;
+  applyFaults(run.scenario.faults, time, loopFaults, run.plantFaults);
+  if (Number.isNaN(loopFaults.boostStuckKpa)) loopFaults.boostStuckKpa = heldKpa;
+  if (Number.isNaN(loopFaults.turboSpeedStuckRpm)) loopFaults.turboSpeedStuckRpm = heldRpm;
   let next = Number.POSITIVE_INFINITY;
   for (const fault of run.scenario.faults) {
     for (const edge of [fault.from, fault.from + fault.lasting]) {
