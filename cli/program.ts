@@ -7,7 +7,6 @@ const VERSION = "0.1.0";
 
 /** The commands still to come, with the sentence that the help shows. */
 const PLANNED: readonly (readonly [string, string])[] = [
-  ["generate", "writes the controller as TypeScript and C"],
   ["verify", "runs the requirements against random manoeuvres"],
   ["replay", "reruns a counterexample"],
   ["tune", "computes the feedforward map from the plant"],
@@ -60,6 +59,12 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
       done(steady(plant, options, openSession(options)));
     });
 
+  add(program, "generate <spec>", "writes the controller as TypeScript and C with calibration and manifest")
+    .requiredOption("--out <folder>", "folder to write; replaced as a whole")
+    .action(async (spec: string, options: CommonOptions & { out: string }) => {
+      const { generate } = await import("./commands/generate.ts");
+      done(generate(spec, options, openSession(options)));
+    });
   add(program, "simulate <file>", "one run: of a loop spec's scenario, or of a plant file alone")
     .option("--inputs <file>", "plant alone: CSV of commands and surroundings")
     .option("--csv <file>", "write the rows there")
