@@ -42,7 +42,7 @@ function entriesAt(value: unknown, path: string): CalibrationEntry[] {
   );
 }
 
-/** Every number, curve and table of a controller, in the order of its spec's sections. */
+/** Every number, curve and table of a controller, in the order of the spec's lines. */
 export function calibrationEntries(controller: ControllerSpec): CalibrationEntry[] {
-  return entriesAt(controller, "");
+  return entriesAt(controller, "").sort((a, b) => a.at.line - b.at.line);
 }

@@ -16,9 +16,13 @@ function row([first, ...rest]: readonly HtmlPart[]): Html {
 `;
 }
 
-/** A table in a box that scrolls by itself, reachable by keyboard. */
+/**
+ * A table in a box that scrolls by itself, reachable by keyboard. The caption is shown outside the box, where it can
+ * wrap; the table keeps its own for readers that hear it.
+ */
 export function tableBox(table: ValueTable, className: string): Html {
-  return html`<div class="box" role="region" tabindex="0" aria-label="${table.caption}">
+  return html`<p class="caption" aria-hidden="true">${table.caption}</p>
+<div class="box" role="region" tabindex="0" aria-label="${table.caption}">
 <table class="${className}"><caption>${table.caption}</caption>
 <thead><tr>${table.head.map(
     (words) => html`<th scope="col">${words}</th>

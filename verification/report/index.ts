@@ -9,3 +9,4 @@ export {
 } from "./render-steady-plot.ts";
 export { renderTraceHtml, renderTraceSvg } from "./render-trace-plot.ts";
 export type { Agreement, GeneratedFile, ReportContext } from "./report-context.ts";
+export { tracePlotOf } from "./trace-plot-of.ts";

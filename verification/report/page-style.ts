@@ -48,9 +48,11 @@ const PARTS = `
 .verdict.holds{border-color:var(--rule)}
 .verdict.not_exercised{border:1px dashed var(--soft)}
 .violations li{margin-bottom:.4rem}
-.box{overflow-x:auto;margin:.5rem 0 .9rem;scrollbar-width:thin}
+.box{overflow-x:auto;margin:.5rem 0 .9rem;scrollbar-width:thin;position:relative}
+.caption+.box{margin-top:.15rem}
 table{overflow-wrap:break-word;border-collapse:collapse;font-size:.88rem;line-height:1.35;font-variant-numeric:tabular-nums}
-caption{white-space:nowrap;text-align:left;color:var(--soft);padding:0 0 .3rem;caption-side:top}
+caption{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%);white-space:nowrap}
+.caption{color:var(--soft);font-size:.88rem;margin:.9rem 0 0;max-width:none}
 th,td{padding:.28rem .65rem;border-bottom:1px solid var(--rule);text-align:right;vertical-align:top}
 thead th{border-bottom:1.5px solid var(--ink);vertical-align:bottom;font-weight:600}
 td{white-space:nowrap}
@@ -66,6 +68,7 @@ table.figures td:nth-child(3),table.inputs th:nth-child(3),table.numbers th,tabl
 table.scenarios th:nth-child(4),table.scenarios th:nth-child(5),table.figures th:nth-child(3),table.files td:nth-child(3),
 table.files th:nth-child(3){text-align:left}
 table.inputs td:nth-child(2){text-align:right}
+table.agreement th[scope=row]{min-width:9rem}
 ul.plain{list-style:none;padding:0;margin:0}
 .hash{font-size:.82em}
 figure{margin:.9rem 0 1.2rem}
@@ -100,7 +103,8 @@ table.requirements th[scope=row]{min-width:0}
 td,caption,table.requirements td.words{white-space:normal}
 .hash{font-size:.7em;word-break:break-all}
 figure,tr,.cautions,.headline{break-inside:avoid}
-h2,h3,caption{break-after:avoid}
+h2,h3,.caption{break-after:avoid}
+.caption{font-size:8pt}
 thead{display:table-header-group}
 .picture{min-width:0!important;max-width:165mm!important}
 .pair{grid-template-columns:minmax(0,1fr) minmax(0,1fr)}

@@ -10,13 +10,13 @@ const controller = {
   target: {
     boost: {
       rowsOver: "accelerator",
-      rows: [20, 100],
+      rows: [0.2, 1],
       rowsUnit: "%",
       columnsOver: "engine_speed",
       columns: [2000, 4000, 6000],
       columnsUnit: "rpm",
       values: [110, 115, 120, 180, 240, 238],
-      unit: "kPa abs",
+      unit: "bar abs",
       at: at(30),
     },
     ceiling: { value: 245, written: "245 kPa abs", at: at(41) },
