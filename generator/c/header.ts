@@ -1,5 +1,6 @@
 import type { Enumeration, Field, Program, Struct } from "../ir/program.ts";
 import { findFunction } from "../ir/program.ts";
+import { layoutOf, layoutStruct } from "../layout/layout.ts";
 import type { StructRole } from "../lowered.ts";
 import { blockComment } from "../print/comment-text.ts";
 import { upperCase } from "../print/identifiers.ts";
@@ -57,14 +58,11 @@ const printStruct = (program: Program, names: Names, struct: Struct): readonly s
   `} ${names.struct(struct.name)};`,
 ];
 
-const isOuter = (program: Program, { name }: Struct): boolean =>
-  !program.structs.some(({ fields }) =>
-    fields.some(({ type }) => type.kind === "struct" && type.name === name),
-  );
-
 /** The role's sentence stands above the struct's own, once per struct that the caller owns. */
 const withRole = (program: Program, struct: Struct): Struct =>
-  isOuter(program, struct) ? { ...struct, doc: [ROLE[struct.role], ...struct.doc] } : struct;
+  layoutStruct(layoutOf(program), struct.name).outer
+    ? { ...struct, doc: [ROLE[struct.role], ...struct.doc] }
+    : struct;
 
 const printPrototypes = (program: Program, names: Names): readonly string[] => {
   const effects = effectsOf(program.functions);

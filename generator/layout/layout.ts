@@ -14,6 +14,8 @@ export interface LayoutStruct {
   readonly name: string;
   readonly printed: string;
   readonly role: StructRole;
+  /** The caller owns one: it is no part of another struct. */
+  readonly outer: boolean;
   readonly fields: readonly LayoutField[];
 }
 
@@ -35,7 +37,15 @@ export interface Layout {
   readonly calibrationStruct?: string;
 }
 
+const innerStructs = (program: Program): ReadonlySet<string> =>
+  new Set(
+    program.structs.flatMap(({ fields }) =>
+      fields.flatMap(({ type }) => (type.kind === "struct" ? [type.name] : [])),
+    ),
+  );
+
 export const layoutOf = (program: Program): Layout => {
+  const inner = innerStructs(program);
   const names = namesOf(program);
   const field = ({ name, type }: Field): LayoutField => ({ name, printed: names.field(name), type });
   return {
@@ -45,6 +55,7 @@ export const layoutOf = (program: Program): Layout => {
       name: struct.name,
       printed: names.struct(struct.name),
       role: struct.role,
+      outer: !inner.has(struct.name),
       fields: struct.fields.map(field),
     })),
     entries: program.entries.map((entry) => ({

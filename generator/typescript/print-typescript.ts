@@ -115,13 +115,8 @@ const printCreator = (
 
 const printData = (program: Program, names: Names): readonly string[] => {
   const layout = layoutOf(program);
-  const inner = new Set(
-    program.structs.flatMap(({ fields }) =>
-      fields.flatMap(({ type }) => (type.kind === "struct" ? [type.name] : [])),
-    ),
-  );
   return layout.structs
-    .filter(({ name }) => !inner.has(name))
+    .filter(({ outer }) => outer)
     .flatMap(({ name }) => {
       const object =
         name === layout.calibrationStruct
