@@ -1,7 +1,10 @@
 import {
   type DrawnScenario,
+  type OperatingPoint,
   openingForBoost,
   type PlantParameters,
+  type ReachableBoost,
+  reachableBoost,
   standardPressure,
   type Trace,
 } from "../hil-sim/index.ts";
@@ -11,25 +14,59 @@ import { recorded } from "./patterns/recorded.ts";
 const RADIAN_PER_RPM = 0.10471975511965977;
 
 /**
- * Whether the plant of a run can hold what a command asks for, by the steady solver on that plant: at the engine speed
- * and accelerator at the end of the command's window there is a gate opening, no end stop, at which the wanted boost
- * stays. Closed and below: out of reach; open and above: saturated. The controller has no say in it.
+ * Room that a plant needs beyond a target on either side, as a ratio of it: a gate at its stop within the usual
+ * settling band has nothing left to settle with.
  */
-export function canHold(
+const ROOM = 0.025;
+
+/** What the plant of a run can make of a command, by the steady solver; the controller has no say in it. */
+export interface Reach {
+  /** Some gate opening, no end stop, holds the wanted boost. */
+  readonly holds: boolean;
+  /** The same for targets 2.5 % higher and lower, and the hold that the command leaves was held or asked for no boost. */
+  readonly withRoom: boolean;
+}
+
+/**
+ * The reach of each command of a run, on that run's plant, at the engine speed and accelerator at the end of the
+ * command's window. `leastBoost`: kPa above ambient below which a target asks for no boost.
+ */
+export function reachOfCommands(
   parameters: PlantParameters,
   scenario: DrawnScenario,
   trace: Trace,
-  command: Command,
-): boolean {
-  const last = command.until - 1;
-  const point = {
-    throttle: recorded(trace, "accelerator")[last],
+  commands: readonly Command[],
+  leastBoost: number,
+): Reach[] {
+  const ambient = standardPressure(scenario.ambient.altitude);
+  const ranges = new Map<string, ReachableBoost>();
+  const wanted = recorded(trace, "boost_wanted");
+  const holds = (command: Command, ratio: number): boolean => {
+    const point = pointAt(scenario, trace, command.until - 1);
+    const boost = wanted[command.until - 1] * ratio * 1000;
+    const key = `${point.engineSpeed} ${point.throttle}`;
+    const range = ranges.get(key) ?? reachableBoost(parameters, point);
+    ranges.set(key, range);
+    if (range.converged) return boost > range.lowest && boost < range.highest;
+    return openingForBoost(parameters, point, boost).kind === "held";
+  };
+  const fits = commands.map((command) => holds(command, 1));
+  return commands.map((command, index) => {
+    const before = commands[index - 1];
+    const startsWell =
+      before === undefined || fits[index - 1] || before.to * 1000 < ambient + leastBoost * 1000;
+    const room = fits[index] && holds(command, 1 - ROOM) && holds(command, 1 + ROOM);
+    return { holds: fits[index], withRoom: room && startsWell };
+  });
+}
+
+function pointAt(scenario: DrawnScenario, trace: Trace, sample: number): OperatingPoint {
+  return {
+    throttle: recorded(trace, "accelerator")[sample],
     bypass: 0,
     fuel: 1,
-    engineSpeed: recorded(trace, "engine_speed")[last] * RADIAN_PER_RPM,
+    engineSpeed: recorded(trace, "engine_speed")[sample] * RADIAN_PER_RPM,
     ambientPressure: standardPressure(scenario.ambient.altitude),
     ambientTemperature: scenario.ambient.temperature,
   };
-  const wanted = recorded(trace, "boost_wanted")[last] * 1000;
-  return openingForBoost(parameters, point, wanted).kind === "held";
 }

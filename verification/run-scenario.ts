@@ -13,9 +13,9 @@ import type { PlantSpec } from "../spec/plant-spec.ts";
 import type { RequirementSpec, TraceSignal } from "../spec/requirement-spec.ts";
 import type { ScenarioSpec } from "../spec/scenario-spec.ts";
 import { type Draw, scenarioOf } from "./draw.ts";
-import { type Command, findCommands } from "./patterns/commands.ts";
+import { findCommands } from "./patterns/commands.ts";
 import { followsTarget, judge, neededSignals } from "./patterns/judge.ts";
-import { canHold } from "./reachability.ts";
+import { reachOfCommands } from "./reachability.ts";
 import { scatteredParameters } from "./scatter.ts";
 
 /** One run and how every requirement of its scenario came out. The trace is overwritten by the next run. */
@@ -54,6 +54,7 @@ export function scenarioRunner(
   const nominal = plantParameters(plant);
   const requirements = requirementsOf(loop, scenario);
   const restOpening = loop.controller.actuator.restOpening.value;
+  const leastBoost = loop.controller.target.leastBoost.value;
   const trace = newTrace(recordedSignals(requirements, signals), scenario.duration.high, signals.length > 0);
   return (draw) => {
     const fixed = scenarioOf(scenario, draw);
@@ -63,7 +64,7 @@ export function scenarioRunner(
       scenario: fixed,
       parameters,
       trace,
-      margins: judgeAll(requirements, parameters, fixed, trace),
+      margins: judgeAll(requirements, leastBoost, parameters, fixed, trace),
       leftValidity: summary.leftValidity,
       clamped: summary.clamps > 0 || summary.sawNotANumber,
     };
@@ -85,17 +86,20 @@ function recordedSignals(
 
 function judgeAll(
   requirements: readonly RequirementSpec[],
+  leastBoost: number,
   parameters: PlantParameters,
   scenario: DrawnScenario,
   trace: Trace,
 ): (number | undefined)[] {
-  const following = requirements.some(({ pattern }) => followsTarget(pattern));
-  const commands = following ? findCommands(trace) : [];
-  const filtering = requirements.some((each) => followsTarget(each.pattern) && each.onlyIfReachable);
-  const held: Command[] = filtering
-    ? commands.filter((command) => canHold(parameters, scenario, trace, command))
+  const following = requirements.filter(({ pattern }) => followsTarget(pattern));
+  const commands = following.length > 0 ? findCommands(trace) : [];
+  const reach = following.some(({ onlyIfReachable }) => onlyIfReachable)
+    ? reachOfCommands(parameters, scenario, trace, commands, leastBoost)
     : [];
-  return requirements.map(({ pattern, onlyIfReachable }) =>
-    judge(pattern, trace, onlyIfReachable ? held : commands),
-  );
+  const held = commands.filter((_, index) => reach[index]?.holds);
+  const roomy = commands.filter((_, index) => reach[index]?.withRoom);
+  return requirements.map(({ pattern, onlyIfReachable }) => {
+    const reachable = pattern.kind === "rises" ? held : roomy;
+    return judge(pattern, trace, onlyIfReachable ? reachable : commands);
+  });
 }

@@ -1,47 +1,33 @@
-import { copyPlantParameters, type ParameterName, type PlantParameters } from "../hil-sim/index.ts";
-import type { ScenarioSpec } from "../spec/scenario-spec.ts";
+import {
+  applyScatter,
+  copyPlantParameters,
+  type PlantParameters,
+  SCATTER_SETS,
+  type ScatterSet,
+  uniformScatter,
+} from "../hil-sim/index.ts";
+import type { ScenarioSpec } from "../spec/index.ts";
 
-const SETS: Record<string, [ParameterName, number][]> = {
-  default: [
-    ["turbineFlow", 0.1],
-    ["turbineEfficiency", 0.1],
-    ["rotorInertia", 0.1],
-    ["boostVolume", 0.1],
-    ["intakeVolume", 0.1],
-    ["exhaustVolume", 0.1],
-    ["wastegatePortArea", 0.1],
-    ["curtainFactor", 0.1],
-    ["wastegateTimeConstant", 0.1],
-    ["wastegateRate", 0.1],
-    ["airFilterLoss", 0.1],
-    ["intercoolerLoss", 0.1],
-    ["exhaustLoss", 0.1],
-    ["wallFlow", 0.1],
-    ["exhaustTemperatureFlow", 0.1],
-    ["throttleArea", 0.1],
-    ["stallPressure", 0.1],
-    ["exhaustTemperatureBase", 0.05],
-    ["volumetricEfficiencyBase", 0.05],
-    ["lambda", 0.05],
-    ["intercoolerEffectiveness", 0.06],
-    ["peakHead", 0.03],
-    ["workSlip", 0.03],
-  ],
-};
-
-export function scatterNames(scatter: ScenarioSpec["plantScatter"]): string[] {
-  return scatter.kind === "set" ? SETS[scatter.name].map(([name]) => name) : [];
+/** What a scenario's plant scatter moves, in the order of a draw's shares. */
+function scatterSet(scatter: ScenarioSpec["plantScatter"]): ScatterSet {
+  if (scatter.kind === "none") return [];
+  if (scatter.kind === "uniform") return uniformScatter(scatter.ratio);
+  const sets: Readonly<Record<string, ScatterSet>> = SCATTER_SETS;
+  const set = Object.hasOwn(sets, scatter.name) ? sets[scatter.name] : undefined;
+  if (set === undefined) throw new Error(`no scatter set is called \`${scatter.name}\``);
+  return set;
 }
 
+export function scatterNames(scatter: ScenarioSpec["plantScatter"]): string[] {
+  return scatterSet(scatter).map(({ name }) => name);
+}
+
+/** The plant of one run; `shares` in [-1, 1], one for each of `scatterNames`. */
 export function scatteredParameters(
   nominal: PlantParameters,
   scatter: ScenarioSpec["plantScatter"],
-  draws: readonly number[],
+  shares: readonly number[],
 ): PlantParameters {
-  const parameters = copyPlantParameters(nominal);
-  if (scatter.kind !== "set") return parameters;
-  SETS[scatter.name].forEach(([name, ratio], index) => {
-    parameters[name] *= 1 + ratio * draws[index];
-  });
-  return parameters;
+  const set = scatterSet(scatter);
+  return set.length === 0 ? copyPlantParameters(nominal) : applyScatter(nominal, set, shares);
 }
