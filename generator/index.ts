@@ -1,4 +1,10 @@
 // The door of generator: a checked spec and the runtime's text in, code for every target out. No disk, no clock.
+export { type Difference, firstDifference, recordedSteps } from "./agreement/compare.ts";
+export { type FrameLayout, frameLayout } from "./agreement/frames.ts";
+export { type Frames, hostileCalibration, hostileFrames } from "./agreement/hostile-inputs.ts";
+export { type Recording, runModule, specifiedCalibration } from "./agreement/run-module.ts";
+export type { WordBuffer } from "./agreement/word-buffer.ts";
+export { printHarness } from "./c/harness.ts";
 export { ARITHMETIC, WARNINGS } from "./c/makefile.ts";
 export { printC } from "./c/print-c.ts";
 export { type Compiled, type CompileInput, compileProgram } from "./compile-program.ts";
