@@ -1,6 +1,7 @@
 import type { PlantSpec } from "../plant-spec.ts";
 import type { Quantity, Range } from "../quantity.ts";
 import type { Span } from "../span.ts";
+import { camel } from "../table/camel.ts";
 import type { Value } from "../table/kind.ts";
 import type { PLANT_BLOCK } from "../table/plant-table.ts";
 
@@ -35,13 +36,10 @@ function placesOf(value: unknown, prefix: string, into: Map<string, Span>): Map<
   const block = value as { readonly places: Readonly<Record<string, Span>> } & Record<string, unknown>;
   for (const [key, span] of Object.entries(block.places)) {
     into.set(`${prefix}${key}`, span);
-    placesOf(block[camelOf(key)], `${prefix}${key}.`, into);
+    placesOf(block[camel(key)], `${prefix}${key}.`, into);
   }
   return into;
 }
-
-const camelOf = (name: string): string =>
-  name.replace(/_([a-z0-9])/g, (_, letter: string) => letter.toUpperCase());
 
 /** The plant in SI numbers, from what was read without an error. */
 export function assemblePlant(read: Plant): PlantSpec {

@@ -1,5 +1,6 @@
 import type { Axes } from "../table/kind.ts";
 import { entryOf, type MapNode, type Node } from "../text/node.ts";
+import { startOf } from "../text/positions.ts";
 import type { Context, Place } from "./context.ts";
 import { readNumbers, readUnitKey } from "./read-numbers.ts";
 import { refuseShape } from "./refuse-shape.ts";
@@ -13,8 +14,8 @@ export interface Axis {
 }
 
 const exampleOf = (name: string, axes: Axes): string => {
-  const { shown } = axes[name];
-  return shown === "" ? `{ ${name}: [1.2, 1.8, 2.4] }` : `{ ${name}: [10, 50, 90], unit: "${shown}" }`;
+  const { shown, example = "[0, 50, 100]" } = axes[name];
+  return shown === "" ? `{ ${name}: ${example} }` : `{ ${name}: ${example}, unit: "${shown}" }`;
 };
 
 /** `{ engine_speed: [1500, 2500], unit: rpm }`: what the axis is, and its points, strictly increasing. */
@@ -115,7 +116,7 @@ export function refuseKeys(node: MapNode, known: readonly string[], place: Place
     if (key !== "unit" && entryOf(node, key) === undefined)
       context.report({
         code: "missing-key",
-        at: { ...node.at, endLine: node.at.line, endColumn: node.at.column + 1 },
+        at: startOf(node.at),
         message: `${place.name} has no \`${key}\``,
         fix: place.fix,
       });

@@ -1,7 +1,9 @@
 import type { BlockKind, Kind, Shapes, TupleKind, VariantsKind } from "../table/kind.ts";
 import { entryOf, isEmpty, type Node } from "../text/node.ts";
+import { startOf } from "../text/positions.ts";
+import { checkKeys } from "./check-keys.ts";
 import { type Context, type Place, placeOfKey } from "./context.ts";
-import { checkUnknown, readBlock, readKeys } from "./read-block.ts";
+import { readBlock, readKeys } from "./read-block.ts";
 import { readCurve } from "./read-curve.ts";
 import { readInteger } from "./read-integer.ts";
 import { nth } from "./read-numbers.ts";
@@ -72,7 +74,7 @@ function readTuple(node: Node, kind: TupleKind, place: Place, context: Context):
 
 function readList(node: Node, of: Kind, place: Place, name: string, context: Context): unknown {
   if (node.kind !== "list") return refuseShape(node, "a list", place, context);
-  return node.items.map((item) => readKind(item, of, place, name, context));
+  return node.items.map((item, i) => readKind(item, of, nth(i, place), `item ${i + 1} of ${name}`, context));
 }
 
 function readMap(node: Node, of: Kind, place: Place, context: Context): unknown {
@@ -106,7 +108,7 @@ function readVariants(node: Node, kind: VariantsKind, name: string, context: Con
     );
   const entry = entryOf(node, kind.tag);
   if (entry === undefined) {
-    const at = { ...node.at, endLine: node.at.line, endColumn: node.at.column + 1 };
+    const at = startOf(node.at);
     const label = `expected ${orList(tags)}`;
     context.report({
       code: "missing-key",
@@ -120,14 +122,13 @@ function readVariants(node: Node, kind: VariantsKind, name: string, context: Con
   const tag = readWord(entry.value, tags, place, context);
   if (tag === undefined) return undefined;
   const keys = kind.variants[tag];
-  const tagKey = {
-    of: { kind: "word", words: tags },
-    need: "required",
-    description: kind.description,
-    example: tag,
+  const of = { kind: "word", words: tags } as const;
+  const all = {
+    [kind.tag]: { of, need: "required", description: kind.description, example: tag },
+    ...keys,
   } as const;
-  const meant = checkUnknown(node, { keys: { [kind.tag]: tagKey, ...keys } }, name, context);
-  return { ...readKeys(node, keys, name, meant, context), [kind.tag]: tag };
+  const meant = checkKeys(node, { keys: all }, name, context);
+  return { ...readKeys(node, keys, meant, context), [kind.tag]: tag };
 }
 
 function readShape(node: Node, shapes: Shapes, place: Place, name: string, context: Context): unknown {

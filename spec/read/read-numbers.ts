@@ -1,9 +1,11 @@
 import { convertQuantity } from "../quantities/convert.ts";
 import type { Limits, UnitChoice } from "../table/kind.ts";
 import { entryOf, type MapNode, type Node } from "../text/node.ts";
+import { startOf } from "../text/positions.ts";
+import { activeUnits } from "./active-units.ts";
 import { checkLimits } from "./check-limits.ts";
 import type { Context, Place } from "./context.ts";
-import { expectedOf, type Match, matchUnit } from "./match-unit.ts";
+import { type Match, matchUnit } from "./match-unit.ts";
 import { isDecimal, refuseNumber } from "./number-text.ts";
 import { refuseShape } from "./refuse-shape.ts";
 
@@ -18,9 +20,10 @@ export function readUnitKey(
   context: Context,
 ): Match | undefined {
   const entry = entryOf(block, "unit");
-  if (entry === undefined) return matchUnit("", block.at, units, place, context);
-  if (entry.value.kind !== "scalar") return refuseShape(entry.value, "a unit", place, context);
-  return matchUnit(entry.value.text.trim(), entry.value.at, units, place, context);
+  const own = { ...place, fix: `unit: "${activeUnits(units, context)[0]?.shown ?? ""}"` };
+  if (entry === undefined) return matchUnit("", startOf(block.at), units, own, context);
+  if (entry.value.kind !== "scalar") return refuseShape(entry.value, "a unit", own, context);
+  return matchUnit(entry.value.text.trim(), entry.value.at, units, own, context);
 }
 
 /** A list of bare numbers in one unit; undefined when any of them is wrong (each is reported). */
@@ -83,5 +86,3 @@ function refuseListed(text: string, node: Node, place: Place, context: Context):
       fix: place.fix,
     });
 }
-
-export { expectedOf };

@@ -5,9 +5,10 @@ import type { Span } from "../span.ts";
 import type { Limits, UnitChoice } from "../table/kind.ts";
 import type { Node, ScalarNode } from "../text/node.ts";
 import { within } from "../text/positions.ts";
+import { activeUnits, expectedOf } from "./active-units.ts";
 import { checkLimits } from "./check-limits.ts";
 import type { Context, Place } from "./context.ts";
-import { expectedOf, type Match, matchUnit } from "./match-unit.ts";
+import { type Match, matchUnit } from "./match-unit.ts";
 import { isDecimal, refuseNumber } from "./number-text.ts";
 import { refuseShape } from "./refuse-shape.ts";
 
@@ -29,12 +30,20 @@ export interface Amount extends Quantity {
 
 const NUMBER_AND_UNIT = /^([+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?)(?![\d.])\s*(.*)$/s;
 
+/** The line to paste follows the unit that is wanted under the words elsewhere. */
+function withExample(place: Place, leaf: Leaf, context: Context): Place {
+  const example = activeUnits(leaf.units, context)[0]?.example;
+  if (example === undefined || !place.fix.endsWith(place.example)) return place;
+  return { ...place, example, fix: `${place.fix.slice(0, -place.example.length)}${example}` };
+}
+
 /** A number with its unit, converted, or a report. */
-export function readAmount(piece: Piece, leaf: Leaf, place: Place, context: Context): Amount | undefined {
+export function readAmount(piece: Piece, leaf: Leaf, given: Place, context: Context): Amount | undefined {
+  const place = withExample(given, leaf, context);
   const text = piece.text.trim().replace(/\s+/g, " ");
   const [, number, unitText] = NUMBER_AND_UNIT.exec(text) ?? [];
   if (number === undefined || !isDecimal(number)) {
-    refuseNumber(text, piece.at, expectedOf(leaf.units), place, context);
+    refuseNumber(text, piece.at, expectedOf(leaf.units, context), place, context);
     return undefined;
   }
   const unitAt =
@@ -64,7 +73,7 @@ function textSpan(node: ScalarNode): Span {
 const plain = ({ value, written, at }: Amount): Quantity => ({ value, written, at });
 
 export function readQuantity(node: Node, leaf: Leaf, place: Place, context: Context): Quantity | undefined {
-  const piece = pieceOf(node, expectedOf(leaf.units), place, context);
+  const piece = pieceOf(node, expectedOf(leaf.units, context), place, context);
   const amount = piece && readAmount(piece, leaf, place, context);
   return amount && plain(amount);
 }
@@ -110,7 +119,7 @@ export function readRange(node: Node, leaf: Leaf, place: Place, context: Context
   const [low, high] = halves.map((half) => readAmount(half, leaf, place, context));
   if (low === undefined || high === undefined) return undefined;
   if (Math.fround(low.value) < Math.fround(high.value)) return { low: plain(low), high: plain(high) };
-  refuseOrder(low, high, "must rise from low to high", piece.at, place, context);
+  refuseOrder(low, high, "must rise from low to high", piece.at, withExample(place, leaf, context), context);
   return undefined;
 }
 
@@ -132,7 +141,7 @@ function refuseOrder(
 }
 
 export function readFree(node: Node, leaf: Leaf, place: Place, context: Context): Free | undefined {
-  const piece = pieceOf(node, expectedOf(leaf.units), place, context);
+  const piece = pieceOf(node, expectedOf(leaf.units, context), place, context);
   if (piece === undefined) return undefined;
   const halves = split(piece, BETWEEN) ?? [piece, piece];
   const low = readAmount(halves[0], leaf, place, context);

@@ -64,7 +64,7 @@ export function readWord(
     at: node.at,
     message: `${place.name} cannot be ${quote(node.text)}`,
     label: near === undefined || trap ? `expected ${orList(all)}` : `did you mean \`${near}\`?`,
-    fix: place.fix,
+    fix: near === undefined || trap ? place.fix : place.fix.replace(place.example, near),
   });
   return undefined;
 }

@@ -1,6 +1,7 @@
 import type { Report } from "../diagnostics/report.ts";
 import { RADIANS_PER_SECOND_PER_RPM } from "../quantities/rpm.ts";
-import { type Rule, type Seen, short, startOf, writtenAt } from "./rule.ts";
+import { startOf } from "../text/positions.ts";
+import { type Rule, type Seen, short, writtenAt } from "./rule.ts";
 import { speedQuantum } from "./signal-rules.ts";
 
 /** The overspeed guard. */

@@ -3,7 +3,8 @@ import type { Quantity } from "../quantity.ts";
 import { nearestName, orList, quote } from "../read/suggest.ts";
 import type { HoledLoop } from "../read-loop-spec.ts";
 import type { Span } from "../span.ts";
-import { type Controller, short, startOf, writtenAt } from "./rule.ts";
+import { startOf } from "../text/positions.ts";
+import { type Controller, short, writtenAt } from "./rule.ts";
 
 type Requirement = NonNullable<NonNullable<HoledLoop["requirements"]>[number]>;
 

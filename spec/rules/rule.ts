@@ -24,6 +24,3 @@ export const writtenAt = (block: Placed | undefined, key: string): Span | undefi
 
 /** Few digits, for messages. */
 export const short = (value: number): string => String(Number(value.toPrecision(4)));
-
-/** A block is shown where it starts, not over all its lines. */
-export const startOf = (at: Span): Span => ({ ...at, endLine: at.line, endColumn: at.column + 1 });

@@ -25,6 +25,11 @@ export function checkScenario(scenario: Scenario, plant: PlantSpec | undefined, 
   if (plant !== undefined) checkValidity(scenario, plant, report);
 }
 
+const STARTS = {
+  engineSpeed: "{ at: 0 s, value: 4000 rpm }",
+  accelerator: "{ at: 0 s, value: 20 % }",
+  target: "{ at: 0 s, value: 160 kPa abs }",
+} as const;
 const NAMES = { engineSpeed: "engine_speed", accelerator: "accelerator", target: "target" } as const;
 
 function checkCourse(course: Course, scenario: Scenario, key: keyof typeof NAMES, report: Report): void {
@@ -39,7 +44,7 @@ function checkCourse(course: Course, scenario: Scenario, key: keyof typeof NAMES
       at: first?.at?.at ?? scenario.places[name],
       message: `the course of \`${name}\` does not say where it starts`,
       label: "the first point must be at 0 s",
-      fix: `{ at: 0 s, value: ${first?.value === undefined ? "..." : "the starting value"} }`,
+      fix: STARTS[key],
     });
   const late = points.findIndex(({ at }, i) => i > 0 && isBefore(at, points[i - 1]));
   if (late === -1) return;

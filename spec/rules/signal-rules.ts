@@ -2,7 +2,8 @@ import type { Report } from "../diagnostics/report.ts";
 import type { PlantSpec } from "../plant-spec.ts";
 import type { Span } from "../span.ts";
 import type { Placed } from "../table/kind.ts";
-import { type Controller, type Rule, type Seen, short, startOf, writtenAt } from "./rule.ts";
+import { startOf } from "../text/positions.ts";
+import { type Controller, type Rule, type Seen, short, writtenAt } from "./rule.ts";
 
 /** Signals: which are needed, and what their sensors can show. */
 export const checkSignals: Rule = (seen, report) => {

@@ -1,5 +1,6 @@
 import type { Report } from "../diagnostics/report.ts";
-import { type Rule, type Seen, short, startOf } from "./rule.ts";
+import { startOf } from "../text/positions.ts";
+import { type Rule, type Seen, short } from "./rule.ts";
 
 /** The target and the actuator that follows it. */
 export const checkTarget: Rule = (seen, report) => {

@@ -20,10 +20,11 @@ type Units = UnitChoice | readonly UnitChoice[];
 const many = (units: Units): readonly UnitChoice[] => (Array.isArray(units) ? units : [units as UnitChoice]);
 
 /** An amount, stored in `base`, written in `shown` by example. */
-export const amount = (shown: string, base = shown, when?: When): UnitChoice => ({
+export const amount = (shown: string, base = shown, when?: When, example?: string): UnitChoice => ({
   base: knownUnit(base),
   shown,
   ...(when === undefined ? {} : { when }),
+  ...(example === undefined ? {} : { example }),
 });
 /** Stored 0..1; written in % or bare. */
 export const ratioUnit = (when?: When): UnitChoice => amount("%", "", when);

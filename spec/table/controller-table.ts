@@ -38,34 +38,64 @@ const OPENING_COORDINATE = ["opening"];
 const PER_GAUGE = ["per_gauge_pressure"];
 const PER_KPA = ["constant", "over_engine_speed", "over_target_pressure"];
 
+interface GainExamples {
+  readonly areaPerGauge: string;
+  readonly areaPerKpa: string;
+  readonly openingPerGauge: string;
+  readonly openingPerKpa: string;
+}
+/** A unit by its example: `0.4 %/kPa` is stored in 1/kPa. */
+const like = (example: string, coordinate: readonly string[], schedule: readonly string[]): UnitChoice => {
+  const shown = example.slice(example.indexOf(" ") + 1);
+  return amount(shown, shown.replace("%", "1"), { coordinate, schedule }, example);
+};
 /** Units of a feedback constant: per kPa of error, or per unit of relative error under `per_gauge_pressure`. */
-const gainUnits = (
-  perArea: string,
-  perOpening: string,
-  perAreaKpa: string,
-  perOpeningKpa: string,
-): UnitChoice[] => [
-  amount(perArea, perArea, { coordinate: AREA, schedule: PER_GAUGE }),
-  amount(perAreaKpa, perAreaKpa, { coordinate: AREA, schedule: PER_KPA }),
-  amount(perOpening, perOpening.replace("%", "1"), { coordinate: OPENING_COORDINATE, schedule: PER_GAUGE }),
-  amount(perOpeningKpa, perOpeningKpa.replace("%", "1"), {
-    coordinate: OPENING_COORDINATE,
-    schedule: PER_KPA,
-  }),
+const gainUnits = (examples: GainExamples): UnitChoice[] => [
+  like(examples.areaPerGauge, AREA, PER_GAUGE),
+  like(examples.areaPerKpa, AREA, PER_KPA),
+  like(examples.openingPerGauge, OPENING_COORDINATE, PER_GAUGE),
+  like(examples.openingPerKpa, OPENING_COORDINATE, PER_KPA),
 ];
+const PROPORTIONAL = gainUnits({
+  areaPerGauge: "1481 mm2",
+  areaPerKpa: "10 mm2/kPa",
+  openingPerGauge: "60 %",
+  openingPerKpa: "0.4 %/kPa",
+});
+const INTEGRAL = gainUnits({
+  areaPerGauge: "3951 mm2/s",
+  areaPerKpa: "28 mm2/kPa/s",
+  openingPerGauge: "150 %/s",
+  openingPerKpa: "1 %/kPa/s",
+});
+const DERIVATIVE = gainUnits({
+  areaPerGauge: "163 mm2*s",
+  areaPerKpa: "1.2 mm2*s/kPa",
+  openingPerGauge: "6 %*s",
+  openingPerKpa: "0.05 %*s/kPa",
+});
 const coordinateUnits = [
+  amount("mm2", "mm2", { coordinate: AREA }, "-220 mm2 to 220 mm2"),
+  amount("%", "", { coordinate: OPENING_COORDINATE }, "-20 % to 20 %"),
+];
+const feedforwardUnits = [
   amount("mm2", "mm2", { coordinate: AREA }),
   amount("%", "", { coordinate: OPENING_COORDINATE }),
 ];
 const guardGainUnits = [
-  amount("mm2/krpm", "mm2/rpm", { coordinate: AREA }),
-  amount("%/krpm", "1/rpm", { coordinate: OPENING_COORDINATE }),
+  amount("mm2/krpm", "mm2/rpm", { coordinate: AREA }, "20.9 mm2/krpm"),
+  amount("%/krpm", "1/rpm", { coordinate: OPENING_COORDINATE }, "3 %/krpm"),
 ];
+
+/** Axes of curves and tables, with points to paste. */
+const SPEED_AXIS = { engine_speed: { ...speed, example: "[2000, 4000, 6000]" } };
+const PRESSURE_AXIS = { target_pressure: { ...absolute, example: "[120, 180, 240]" } };
+const RATIO_AXIS = { pressure_ratio: { ...bareUnit, example: "[1.2, 1.8, 2.4]" } };
 
 const gain = (units: readonly UnitChoice[]) =>
   shape({
     scalar: quantity(units, NOT_NEGATIVE),
-    map: curve({ engine_speed: speed, target_pressure: absolute }, units, NOT_NEGATIVE),
+    map: curve({ ...SPEED_AXIS, ...PRESSURE_AXIS }, units, NOT_NEGATIVE),
   });
 
 const fault = (rate: UnitChoice, rateExample: string, window: string) =>
@@ -180,12 +210,7 @@ export const SIGNALS_BLOCK = block({
 
 const TARGET_BLOCK = block({
   boost: required(
-    table(
-      { accelerator: ratio },
-      { engine_speed: speed },
-      [{ ...absolute, gauge: "kept" }, bareUnit],
-      NOT_NEGATIVE,
-    ),
+    table({ accelerator: ratio }, SPEED_AXIS, [{ ...absolute, gauge: "kept" }, bareUnit], NOT_NEGATIVE),
     "wanted pressure upstream of the throttle at reference air: absolute, gauge, or a plain ratio to ambient",
     '{ rows: { accelerator: [0, 100], unit: "%" }, columns: { engine_speed: [2000, 6000], unit: rpm }, unit: kPa abs, values: [[100, 100], [200, 220]] }',
   ),
@@ -236,10 +261,13 @@ const TARGET_BLOCK = block({
   ),
 });
 
-const bandUnits = [amount("%", "", { schedule: PER_GAUGE }), amount("kPa", "kPa", { schedule: PER_KPA })];
+const bandUnits = [
+  amount("%", "", { schedule: PER_GAUGE }, "10 %"),
+  amount("kPa", "kPa", { schedule: PER_KPA }, "10 kPa"),
+];
 const stillUnits = [
-  amount("%/s", "1/s", { schedule: PER_GAUGE }),
-  amount("kPa/s", "kPa/s", { schedule: PER_KPA }),
+  amount("%/s", "1/s", { schedule: PER_GAUGE }, "15 %/s"),
+  amount("kPa/s", "kPa/s", { schedule: PER_KPA }, "15 kPa/s"),
 ];
 
 const ANTI_WINDUP = variants("method", "how the integral is kept from winding up", {
@@ -272,25 +300,9 @@ const FEEDBACK_BLOCK = block({
       "per_gauge_pressure",
     ),
   ),
-  proportional: required(
-    gain(gainUnits("mm2", "%", "mm2/kPa", "%/kPa")),
-    "proportional constant, positive",
-    "1481 mm2",
-  ),
-  integral: structuralPresence(
-    optional(
-      gain(gainUnits("mm2/s", "%/s", "mm2/kPa/s", "%/kPa/s")),
-      "integral constant, positive",
-      "3951 mm2/s",
-    ),
-  ),
-  derivative: structuralPresence(
-    optional(
-      gain(gainUnits("mm2*s", "%*s", "mm2*s/kPa", "%*s/kPa")),
-      "derivative constant, positive, on the measurement",
-      "163 mm2*s",
-    ),
-  ),
+  proportional: required(gain(PROPORTIONAL), "proportional constant, positive", "1481 mm2"),
+  integral: optional(gain(INTEGRAL), "integral constant, positive", "3951 mm2/s"),
+  derivative: optional(gain(DERIVATIVE), "derivative constant, positive, on the measurement", "163 mm2*s"),
   derivative_filter: optional(duration(POSITIVE), "time constant of the derivative's filter", "20 ms"),
   setpoint_weight: standard(
     quantity(ratio, OPENING),
@@ -298,19 +310,12 @@ const FEEDBACK_BLOCK = block({
     "share of the target in the proportional part",
   ),
   trim_limits: required(range(coordinateUnits), "limits of the integral", "-220 mm2 to 220 mm2"),
-  anti_windup: structuralPresence(
-    optional(
-      ANTI_WINDUP,
-      "needed with an integral",
-      "{ method: conditional, band: 10 %, still_below: 15 %/s }",
-    ),
+  anti_windup: optional(
+    ANTI_WINDUP,
+    "needed with an integral",
+    "{ method: conditional, band: 10 %, still_below: 15 %/s }",
   ),
 });
-
-/** The presence shapes the code, the value does not: told apart only in words. */
-function structuralPresence<K>(key: K): K {
-  return key;
-}
 
 const ACTUATOR_BLOCK = block(
   {
@@ -417,12 +422,7 @@ export const CONTROLLER_BLOCK = block(
       '{ effective_area: { over: { opening: [0, 100], unit: "%" }, unit: mm2, values: [4, 630] } }',
     ),
     feedforward: optional(
-      table(
-        { pressure_ratio: bareUnit, target_pressure: absolute },
-        { engine_speed: speed },
-        coordinateUnits,
-        NOT_NEGATIVE,
-      ),
+      table({ ...RATIO_AXIS, ...PRESSURE_AXIS }, SPEED_AXIS, feedforwardUnits, NOT_NEGATIVE),
       "what holds the target in steady state, in the feedback coordinate",
       "{ rows: { pressure_ratio: [1, 2] }, columns: { engine_speed: [2000, 6000], unit: rpm }, unit: mm2, values: [[500, 600], [100, 200]] }",
     ),

@@ -19,6 +19,8 @@ export interface UnitChoice {
   readonly level?: "temperature" | "pressure";
   /** Pressure levels: what `gauge` becomes. */
   readonly gauge?: "refused" | "against_standard_atmosphere" | "kept";
+  /** What to paste when this unit is the one wanted; absent: the key's example. */
+  readonly example?: string;
   /** Only under these choices. */
   readonly when?: { readonly [Name in keyof Choices]?: readonly string[] };
 }

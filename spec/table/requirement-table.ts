@@ -73,7 +73,7 @@ const PATTERNS = {
   overshoot: optional(
     block({
       of: standard(words("target", "step"), "target", "what the excess is compared with"),
-      at_most: required(quantity(ratio, POSITIVE), "largest excess of boost over the wanted target", "4.5 %"),
+      at_most: required(quantity(ratio, FRACTION), "largest excess of boost over the wanted target", "4.5 %"),
     }),
     "boost above the wanted target after each rise",
     "{ of: target, at_most: 4.5 % }",
@@ -102,7 +102,7 @@ const PATTERNS = {
   steady_error: optional(
     block({
       at_most: required(
-        quantity(ratio, POSITIVE),
+        quantity(ratio, FRACTION),
         "mean of boost minus wanted, of the wanted target",
         "0.4 %",
       ),

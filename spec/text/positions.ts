@@ -41,6 +41,9 @@ export function positionsOf(file: string, text: string): Positions {
   };
 }
 
+/** A block is shown where it starts, not over all its lines. */
+export const startOf = (at: Span): Span => ({ ...at, endLine: at.line, endColumn: at.column + 1 });
+
 /** A stretch of a one-line span: `length` characters from `offset`; the whole span when it has several lines. */
 export function within(span: Span, offset: number, length: number): Span {
   if (span.line !== span.endLine) return span;
