@@ -2,14 +2,13 @@ import type { Lowered } from "../../generator/lowered.ts";
 import type { ControllerPort } from "../../hil-sim/index.ts";
 import { type Calibration, initialise, type Structure, stepBoost, stepGuard } from "../../runtime/index.ts";
 import { copyFastOutput, copySlowOutput, newControllerInput, newControllerOutput } from "./port-values.ts";
-import { clearPosedTarget, liftCeilings, type TargetCalibration, writePosedTarget } from "./pose-target.ts";
+import { posedTarget } from "./pose-target.ts";
 import { newExchange, newFastOutput, newFastState, newSlowOutput, newSlowState } from "./runtime-memory.ts";
 
 /** The runtime itself as a controller, in double precision, whatever precision the spec asks for. */
 export function portFromRuntime(lowered: Pick<Lowered, "structure" | "calibration">): ControllerPort {
   const structure = lowered.structure as unknown as Structure;
-  const generated = lowered.calibration as unknown as Calibration & TargetCalibration;
-  const calibration = structuredClone(generated);
+  const calibration = structuredClone(lowered.calibration) as unknown as Calibration;
   const slow = newSlowState();
   const fast = newFastState(structure.accelerationSteps);
   const exchange = newExchange();
@@ -17,15 +16,24 @@ export function portFromRuntime(lowered: Pick<Lowered, "structure" | "calibratio
   const fastOutput = newFastOutput();
   const input = newControllerInput();
   const output = newControllerOutput();
-  const posed = { kilopascal: Number.NaN, writtenFor: Number.NaN };
+  const target = posedTarget(
+    {
+      cells: calibration.targetBoost.values as number[],
+      holder: calibration as unknown as Record<string, unknown>,
+      airAtMost: "airAtMostRatio",
+      ceiling: "boostCeilingKpa",
+      ratioCeiling: "pressureRatioCeiling",
+    },
+    structure.targetReference,
+    (value) => value,
+  );
   return {
     input,
     output,
     step: structure.stepS,
     guardStep: structure.guardStepS,
     reset() {
-      Object.assign(calibration, structuredClone(generated));
-      clearPosedTarget(posed);
+      target.restore();
       initialise(structure, calibration, slow, fast, exchange);
       Object.assign(output, newControllerOutput());
     },
@@ -34,21 +42,11 @@ export function portFromRuntime(lowered: Pick<Lowered, "structure" | "calibratio
       copyFastOutput(fastOutput, output);
     },
     stepBoost() {
-      writePosedTarget(
-        posed,
-        calibration,
-        structure.targetReference,
-        input.ambientPressureKpa,
-        (value) => value,
-      );
+      target.write(input.ambientPressureKpa);
       stepBoost(structure, calibration, slow, exchange, input, slowOutput);
       copySlowOutput(slowOutput, output);
     },
-    poseTarget(kilopascal) {
-      posed.kilopascal = kilopascal;
-    },
-    liftCeilings() {
-      liftCeilings(calibration);
-    },
+    poseTarget: target.pose,
+    liftCeilings: target.liftCeilings,
   };
 }
