@@ -2,28 +2,24 @@ import type { CallExpression, Expression, Place } from "./expression.ts";
 import type { FunctionDefinition } from "./program.ts";
 import type { Statement } from "./statement.ts";
 
-/** Expressions directly below one. */
-export const operandsOf = (expression: Expression): readonly Expression[] => {
-  switch (expression.kind) {
-    case "operation":
-      return expression.operands;
-    case "element":
-      return [expression.index];
-    case "call":
-      return argumentValues(expression);
-    default:
-      return [];
-  }
-};
-
 export const argumentValues = (call: CallExpression): readonly Expression[] =>
   call.arguments.flatMap((argument) => (argument.kind === "value" ? [argument.value] : []));
 
 /** The expression and everything in it, outermost first. */
 export const eachExpression = (expression: Expression, visit: (each: Expression) => void): void => {
   visit(expression);
-  for (const operand of operandsOf(expression)) {
-    eachExpression(operand, visit);
+  if (expression.kind === "call") {
+    for (const argument of expression.arguments) {
+      if (argument.kind === "value") {
+        eachExpression(argument.value, visit);
+      }
+    }
+  } else if (expression.kind === "operation") {
+    for (const operand of expression.operands) {
+      eachExpression(operand, visit);
+    }
+  } else if (expression.kind === "element") {
+    eachExpression(expression.index, visit);
   }
 };
 

@@ -36,23 +36,33 @@ const localNames = (program: Program): ReadonlySet<string> => {
   return names;
 };
 
+const remembered = (change: (name: string) => string): ((name: string) => string) => {
+  const known = new Map<string, string>();
+  return (name) => {
+    const text = known.get(name) ?? change(name);
+    known.set(name, text);
+    return text;
+  };
+};
+
 export const namesOf = (program: Program): Names => {
   const stem = program.name;
+  const snake = remembered(snakeCase);
   const locals = localNames(program);
   const entries = new Map(
-    program.entries.map((entry) => [entry.function, `${stem}_${entry.printed ?? snakeCase(entry.function)}`]),
+    program.entries.map((entry) => [entry.function, `${stem}_${entry.printed ?? snake(entry.function)}`]),
   );
   const inner = (name: string): string => {
-    const plain = safeFunctionName(snakeCase(name));
+    const plain = safeFunctionName(snake(name));
     return locals.has(plain) ? `compute_${plain}` : plain;
   };
   return {
     stem,
-    struct: (name) => `${stem}_${snakeCase(name)}_t`,
-    enumeration: (name) => `${stem}_${snakeCase(name)}_t`,
+    struct: (name) => `${stem}_${snake(name)}_t`,
+    enumeration: (name) => `${stem}_${snake(name)}_t`,
     member: (enumeration, member) => `${upperCase(stem)}_${upperCase(enumeration)}_${upperCase(member)}`,
-    field: (name) => safeName(snakeCase(name)),
-    local: (name) => safeName(snakeCase(name)),
+    field: (name) => safeName(snake(name)),
+    local: (name) => safeName(snake(name)),
     constant: upperCase,
     function: (name) => entries.get(name) ?? inner(name),
     calibrationDefault: `${stem}_calibration_default`,

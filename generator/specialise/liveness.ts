@@ -7,6 +7,8 @@ import { argumentValues, bodiesOf, eachCallOf, eachExpression, eachStatement } f
 export interface Code extends Pick<Program, "functions" | "structs"> {
   readonly entries: readonly string[];
   readonly byName: ReadonlyMap<string, FunctionDefinition>;
+  readonly placeKeys: WeakMap<Place, readonly string[]>;
+  readonly callsIn: WeakMap<Expression, readonly CallExpression[]>;
 }
 
 /** What something depends on, by key: `Struct.field`, `function(parameter`, `function:local`. Grows until nothing changes. */
@@ -18,7 +20,7 @@ export const fieldKey = (struct: string, field: string): string => `${struct}.${
 export const parameterKey = (owner: string, parameter: string): string => `${owner}(${parameter}`;
 const localKey = (owner: string, local: string): string => `${owner}:${local}`;
 
-/** Struct and field at each step along a place. */
+/** Struct of each field along a place, and the field. */
 export const stepsOf = (
   code: Pick<Code, "structs">,
   owner: FunctionDefinition,
@@ -35,8 +37,19 @@ export const stepsOf = (
   });
 };
 
+/** Keys of the fields along a place; places are asked for many times, hence the memory. */
+const keysOf = (code: Code, owner: FunctionDefinition, place: Place): readonly string[] => {
+  const known = code.placeKeys.get(place);
+  if (known !== undefined) {
+    return known;
+  }
+  const keys = stepsOf(code, owner, place).map(({ struct, field }) => fieldKey(struct, field));
+  code.placeKeys.set(place, keys);
+  return keys;
+};
+
 const isLivePlace = (code: Code, live: Live, owner: FunctionDefinition, place: Place): boolean =>
-  stepsOf(code, owner, place).every(({ struct, field }) => live.marks.has(fieldKey(struct, field)));
+  keysOf(code, owner, place).every((key) => live.marks.has(key));
 
 /** A call matters when something it writes matters: a written parameter whose object is live where it comes from. */
 const isCallNeeded = (code: Code, live: Live, owner: FunctionDefinition, call: CallExpression): boolean => {
@@ -54,18 +67,27 @@ const isCallNeeded = (code: Code, live: Live, owner: FunctionDefinition, call: C
 /** The function writes something live through this parameter. */
 const writeKey = (owner: string, parameter: string): string => `${owner}!${parameter}`;
 
+const callsIn = (code: Code, expression: Expression): readonly CallExpression[] => {
+  const known = code.callsIn.get(expression);
+  if (known !== undefined) {
+    return known;
+  }
+  const calls: CallExpression[] = [];
+  eachExpression(expression, (each) => {
+    if (each.kind === "call") {
+      calls.push(each);
+    }
+  });
+  code.callsIn.set(expression, calls);
+  return calls;
+};
+
 const containsNeededCall = (
   code: Code,
   live: Live,
   owner: FunctionDefinition,
   expression: Expression,
-): boolean => {
-  let needed = false;
-  eachExpression(expression, (each) => {
-    needed ||= each.kind === "call" && isCallNeeded(code, live, owner, each);
-  });
-  return needed;
-};
+): boolean => callsIn(code, expression).some((call) => isCallNeeded(code, live, owner, call));
 
 /** Whether a statement has an effect that anything live depends on. */
 export const isNeeded = (
@@ -108,8 +130,8 @@ interface Marker {
 
 const markPlace = ({ code, marks }: Marker, owner: FunctionDefinition, place: Place): void => {
   marks.add(parameterKey(owner.name, place.root));
-  for (const { struct, field } of stepsOf(code, owner, place)) {
-    marks.add(fieldKey(struct, field));
+  for (const key of keysOf(code, owner, place)) {
+    marks.add(key);
   }
 };
 

@@ -104,7 +104,14 @@ export const prune = (
   entries: readonly string[],
 ): Pick<Program, "functions" | "structs"> => {
   const byName = new Map(functions.map((each) => [each.name, each]));
-  const code: Code = { functions, structs, entries, byName };
+  const code: Code = {
+    functions,
+    structs,
+    entries,
+    byName,
+    placeKeys: new WeakMap(),
+    callsIn: new WeakMap(),
+  };
   const live = findLive(code);
   return {
     functions: functions

@@ -14,8 +14,23 @@ import { mapFunction } from "./map-function.ts";
 import { prune } from "./prune.ts";
 import { tidy } from "./tidy.ts";
 
-/** Folding, tidying and pruning feed each other; the runtime settles in five rounds, and more would change nothing. */
-const ROUNDS = 8;
+/** Folding, tidying and pruning feed each other until nothing changes; the runtime settles in about four rounds. */
+const MOST_ROUNDS = 20;
+
+/** How much code there is: a round that leaves it alone twice has nothing left to do. */
+const sizeOf = (functions: readonly FunctionDefinition[], structs: readonly Struct[]): number => {
+  let size = functions.length;
+  for (const definition of functions) {
+    size += definition.parameters.length;
+    eachStatement(definition.body, () => {
+      size += 1;
+    });
+    eachExpressionOf(definition, () => {
+      size += 1;
+    });
+  }
+  return structs.reduce((sum, { fields }) => sum + fields.length, size);
+};
 
 /** Literals and constants rounded to the precision once, here: later passes never round a number again. */
 const roundedNumbers = (
@@ -83,7 +98,7 @@ const usedEnumerations = (
   return used;
 };
 
-const round1 = (
+const simplified = (
   functions: readonly FunctionDefinition[],
   known: Omit<Known, "locals">,
   entries: readonly string[],
@@ -106,9 +121,12 @@ export const specialise = (module: RuntimeModule, lowered: Lowered): Specialised
   const entries = lowered.entries.map((entry) => entry.function);
   let functions: readonly FunctionDefinition[] = module.functions.map((each) => roundedNumbers(each, round));
   let structs = module.structs;
-  for (let i = 0; i < ROUNDS; i++) {
-    functions = reachable(round1(functions, known, entries), entries);
+  let same = 0;
+  for (let i = 0; i < MOST_ROUNDS && same < 2; i++) {
+    const before = sizeOf(functions, structs);
+    functions = reachable(simplified(functions, known, entries), entries);
     ({ functions, structs } = prune({ functions, structs }, entries));
+    same = sizeOf(functions, structs) === before ? same + 1 : 0;
   }
   functions = countArrays(reachable(functions, entries));
   const enumerations = usedEnumerations(functions, structs);
