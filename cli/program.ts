@@ -1,4 +1,4 @@
-import { Command } from "commander";
+import { Command, InvalidArgumentError } from "commander";
 import { CommandFailure } from "./command-failure.ts";
 import type { ExitCode } from "./exit-codes.ts";
 import { type CommonOptions, openSession } from "./session.ts";
@@ -23,6 +23,15 @@ function addPlanned(program: Command, name: string, sentence: string): void {
       throw new CommandFailure(`\`${name}\` is not available in this version`);
     });
 }
+
+/** Parses an option's whole number; `1e6` is one. */
+const wholeNumber =
+  (low: number, high: number) =>
+  (text: string): number => {
+    const value = /^\d+(\.\d+)?(e\d+)?$/.test(text) ? Number(text) : Number.NaN;
+    if (Number.isInteger(value) && value >= low && value <= high) return value;
+    throw new InvalidArgumentError(`expected a whole number from ${low} to ${high}.`);
+  };
 
 /** A command with the options that all commands share. */
 const add = (program: Command, usage: string, sentence: string): Command =>
@@ -64,6 +73,18 @@ export function buildProgram(done: (code: ExitCode) => void): Command {
     .action(async (spec: string, options: CommonOptions & { out: string }) => {
       const { generate } = await import("./commands/generate.ts");
       done(generate(spec, options, openSession(options)));
+    });
+  add(
+    program,
+    "agree <spec>",
+    "steps the controller's interpreter, TypeScript and compiled C side by side, to the bit",
+  )
+    .option("--steps <n>", "steps of every target", wholeNumber(1, 1e12), 20_000)
+    .option("--seed <n>", "seed of the inputs", wholeNumber(0, 2 ** 32 - 1), 1)
+    .option("--out <file>", "write the result as JSON, for the report")
+    .action(async (spec: string, options: CommonOptions & { steps: number; seed: number; out?: string }) => {
+      const { agree } = await import("./commands/agree.ts");
+      done(await agree(spec, options, openSession(options)));
     });
   add(program, "simulate <file>", "one run: of a loop spec's scenario, or of a plant file alone")
     .option("--inputs <file>", "plant alone: CSV of commands and surroundings")

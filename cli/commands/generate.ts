@@ -1,5 +1,5 @@
 import { createHash } from "node:crypto";
-import { generateKit, type Kit } from "../../generator/index.ts";
+import { generateKit, type Kit, type Program } from "../../generator/index.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
 import { writeFolderWhole } from "../files/write-folder.ts";
 import { jsonText, mention, refuse } from "../findings.ts";
@@ -10,8 +10,8 @@ import type { Session } from "../session.ts";
 const sha256 = (text: string): string => createHash("sha256").update(text).digest("hex");
 
 /** A checked spec must compile: a refusal here is a mistake of ours, and is reported as one. */
-function mustCompile(kit: Kit): void {
-  if (kit.refusals.length === 0) return;
+export function mustCompile(kit: Kit): Program {
+  if (kit.program !== undefined) return kit.program;
   const lines = kit.refusals.map(({ code, at, message }) => `${at.file}:${at.line}: ${message} (${code})`);
   throw new Error(`the generator refused its own runtime\n  ${lines.join("\n  ")}`);
 }
