@@ -14,8 +14,9 @@ import { checkPlant } from "./rules/plant-rules.ts";
 import type { Value } from "./table/kind.ts";
 import { LOOP_FILE } from "./table/loop-table.ts";
 import { isInside } from "./text/neighbour-path.ts";
-import { parseText } from "./text/parse.ts";
+import { parseSource } from "./text/parse.ts";
 import type { OpenNeighbour, Source } from "./text/source.ts";
+import { trustBefore } from "./text/trust-before.ts";
 
 export type HoledLoop = Value<typeof LOOP_FILE, "holed">;
 type WholeLoop = Value<typeof LOOP_FILE, "whole">;
@@ -30,15 +31,16 @@ export interface LoopResult {
 /** Reads a loop spec and the plant file beside it: the checked spec in base units, or what is wrong. Never throws for bad text. */
 export function readLoopSpec(source: Source, openNeighbour: OpenNeighbour): LoopResult {
   const findings = collectFindings();
-  const root = parseText(source, findings.report);
-  if (root === undefined) return { diagnostics: findings.sorted() };
-  const context = { report: findings.report, choices: choicesOf(root) };
-  const read = readFile(root, LOOP_FILE, context);
+  const parsed = parseSource(source, findings.report);
+  if (parsed === undefined) return { diagnostics: findings.sorted() };
+  const { root } = parsed;
+  const report = trustBefore(parsed.brokenFrom, findings.report);
+  const read = readFile(root, LOOP_FILE, { report, choices: choicesOf(root) });
   const plant =
     typeof read.plant === "object"
       ? inlinePlant(read.plant, findings)
       : readNeighbour(read, openNeighbour, findings);
-  checkLoop(read, root, plant, findings.report);
+  checkLoop(read, root, plant, report);
   const spec = findings.anyError() ? undefined : assemble(source.file, read as WholeLoop, plant);
   return { ...(spec === undefined ? {} : { spec }), diagnostics: findings.sorted() };
 }

@@ -6,8 +6,9 @@ import { readFile } from "./read/read-block.ts";
 import { checkPlant } from "./rules/plant-rules.ts";
 import type { Value } from "./table/kind.ts";
 import { PLANT_FILE } from "./table/loop-table.ts";
-import { parseText } from "./text/parse.ts";
+import { parseSource } from "./text/parse.ts";
 import type { Source } from "./text/source.ts";
+import { trustBefore } from "./text/trust-before.ts";
 
 type Whole = Value<typeof PLANT_FILE, "whole">;
 
@@ -27,9 +28,10 @@ export function readPlant(source: Source): PlantResult {
 /** As `readPlant`, adding to findings that are already there; undefined when this file has an error. */
 export function readPlantInto(source: Source, findings: Findings): PlantSpec | undefined {
   const own = collectFindings();
-  const root = parseText(source, own.report);
-  const read = root && readFile(root, PLANT_FILE, { report: own.report, choices: {} });
-  if (read?.plant !== undefined) checkPlant(read.plant, own.report);
+  const parsed = parseSource(source, own.report);
+  const report = trustBefore(parsed?.brokenFrom, own.report);
+  const read = parsed && readFile(parsed.root, PLANT_FILE, { report, choices: {} });
+  if (read?.plant !== undefined) checkPlant(read.plant, report);
   findings.include(own.sorted());
   return own.anyError() || read === undefined ? undefined : assemblePlant((read as Whole).plant);
 }

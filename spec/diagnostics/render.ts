@@ -1,5 +1,6 @@
 import pico from "picocolors";
 import type { Diagnostic, Severity } from "../diagnostic.ts";
+import { counted } from "../read/suggest.ts";
 import type { Span } from "../span.ts";
 import type { Source } from "../text/source.ts";
 import { sourceLine, visible } from "./source-line.ts";
@@ -76,8 +77,6 @@ function colourOf(severity: Severity, paint: Paint): (text: string) => string {
   if (severity === "error") return paint.red;
   return severity === "warning" ? paint.yellow : paint.cyan;
 }
-
-const counted = (count: number, word: string): string => `${count} ${word}${count === 1 ? "" : "s"}`;
 
 function summary(diagnostics: readonly Diagnostic[], { consequence }: RenderOptions): string {
   const counts = (["error", "warning", "hint"] as const)

@@ -9,6 +9,7 @@ export interface Finding {
   readonly message: string;
   readonly label?: string;
   readonly because?: readonly { readonly at: Span; readonly message: string }[];
+  /** Empty: none. */
   readonly fix?: string;
 }
 
@@ -49,7 +50,8 @@ export function collectFindings(): Findings {
   const errors = (): readonly Diagnostic[] =>
     [...found.values()].filter(({ severity }) => severity === "error");
   return {
-    report: (finding) => keep({ ...finding, severity: CATALOGUE[finding.code].severity }),
+    report: ({ fix = "", ...finding }) =>
+      keep({ ...finding, severity: CATALOGUE[finding.code].severity, ...(fix === "" ? {} : { fix }) }),
     include: (diagnostics) => diagnostics.forEach(keep),
     sorted: () => [...found.values()].sort(byPlace),
     anyError: () => errors().length > 0,

@@ -3,7 +3,7 @@ import type { BlockKind, KeySet } from "../table/kind.ts";
 import type { Entry, MapNode } from "../text/node.ts";
 import { startOf } from "../text/positions.ts";
 import type { Context } from "./context.ts";
-import { nearestName, orList, quote } from "./suggest.ts";
+import { nearestName, orList, quote, shownName } from "./suggest.ts";
 
 /** Known keys that a misspelt key stands for, with its place: they are not reported as missing too. */
 export type Meant = ReadonlyMap<string, Span>;
@@ -21,31 +21,31 @@ function checkUnknown(node: MapNode, block: Block, name: string, context: Contex
   const present = new Set(node.entries.map((entry) => entry.key));
   const free = Object.keys(block.keys).filter((each) => !present.has(each));
   const meant = new Map<string, Span>();
-  for (const { key, keyAt } of node.entries) {
+  for (const { key, keyAt, value } of node.entries) {
     if (Object.hasOwn(block.keys, key)) continue;
     const near = nearestName(key, free);
     if (block.reserved?.includes(key)) refuseReserved(key, keyAt, context);
     else if (SPLIT_NUMBER.test(key)) refuseSplitNumber(key, keyAt, context);
-    else refuseUnknown(key, keyAt, near, block.keys, name, context);
+    else refuseUnknown({ key, keyAt, value }, near, block.keys, name, context);
     if (near !== undefined) meant.set(near, keyAt);
   }
   return meant;
 }
 
 function refuseUnknown(
-  key: string,
-  at: Span,
+  { key, keyAt: at, value }: Entry,
   near: string | undefined,
   keys: KeySet,
   name: string,
   context: Context,
 ): void {
+  const own = value.kind === "scalar" && !value.quoted ? value.text : "";
   context.report({
     code: "unknown-key",
     at,
-    message: `\`${name}\` has no key ${quote(key)}`,
+    message: `${shownName(name)} has no key ${quote(key)}`,
     label: near === undefined ? `known keys: ${orList(Object.keys(keys))}` : `did you mean \`${near}\`?`,
-    ...(near === undefined ? {} : { fix: `${near}: ${keys[near].example}` }),
+    ...(near === undefined ? {} : { fix: `${near}: ${own || keys[near].example}` }),
   });
 }
 
@@ -83,7 +83,7 @@ function checkMissing(node: MapNode, keys: KeySet, name: string, meant: Meant, c
   context.report({
     code: "missing-key",
     at: startOf(node.at),
-    message: `\`${name}\` has no ${andList(missing.map(([key]) => key))}`,
+    message: `${shownName(name)} has no ${andList(missing.map(([key]) => key))}`,
     label: missing.map(([key, { description }]) => `\`${key}\`: ${description}`)[0],
     ...(fix.length <= LONGEST_FIX ? { fix } : {}),
   });
@@ -107,7 +107,7 @@ function checkOneOf(
     context.report({
       code: "one-of",
       at: startOf(node.at),
-      message: `\`${name}\` needs one of ${orList(oneOf)}`,
+      message: `${shownName(name)} needs one of ${orList(oneOf)}`,
       fix: `${oneOf[0]}: ${keys[oneOf[0]].example}`,
     });
 }
@@ -116,7 +116,7 @@ function refuseSecond(first: Entry, second: Entry, name: string, context: Contex
   context.report({
     code: "one-of",
     at: second.keyAt,
-    message: `\`${name}\` has both \`${first.key}\` and \`${second.key}\`; only one is possible`,
+    message: `${shownName(name)} has both \`${first.key}\` and \`${second.key}\`; only one is possible`,
     because: [{ at: first.keyAt, message: "the other one" }],
     fix: `move \`${second.key}\` to an item of its own`,
   });

@@ -6,14 +6,14 @@ import { checkKeys, type Meant } from "./check-keys.ts";
 import { type Context, placeOfKey } from "./context.ts";
 import { readKind } from "./read-kind.ts";
 import { refuseShape } from "./refuse-shape.ts";
-import { orList } from "./suggest.ts";
+import { orList, shownName } from "./suggest.ts";
 
 type Values = Record<string, unknown>;
 
 /** Reads a map by its keys; absent keys get their default, everything else is reported. Holes stay undefined. */
 export function readBlock(node: Node, kind: BlockKind, name: string, context: Context): Values | undefined {
   if (node.kind === "map") return readKeys(node, kind.keys, checkKeys(node, kind, name, context), context);
-  const place = { name: `\`${name}\``, example: "", fix: exampleBlock(name, kind.keys) };
+  const place = { name: shownName(name), example: "", fix: exampleBlock(name, kind.keys) };
   return refuseShape(node, `a map with ${orList(Object.keys(kind.keys))}`, place, context);
 }
 

@@ -6,6 +6,7 @@ import { isRising, readAxis, refuseKeys } from "./read-axis.ts";
 import { readNumbers, readUnitKey } from "./read-numbers.ts";
 import { refuseShape } from "./refuse-shape.ts";
 import { reportSize } from "./report-size.ts";
+import { counted } from "./suggest.ts";
 
 export function readCurve(
   node: Node,
@@ -27,8 +28,8 @@ export function readCurve(
   if (axis === undefined || values === undefined || match === undefined || valuesNode === undefined)
     return undefined;
   if (values.length !== axis.points.length) {
-    const says = `\`values\` has ${values.length} numbers for ${axis.points.length} points of \`${axis.over}\``;
-    return reportSize(valuesNode.at, says, axis, context);
+    const says = `\`values\` has ${counted(values.length, "number")} for ${counted(axis.points.length, "point")} of \`${axis.over}\``;
+    return reportSize(valuesNode.at, says, axis, "number", context);
   }
   if (kind.increasing && !isRising(values, valuesNode, { ...place, name: "`values`" }, context))
     return undefined;

@@ -11,7 +11,8 @@ export function readInteger(
   place: Place,
   context: Context,
 ): Quantity | undefined {
-  const expected = `a whole number from ${kind.least} to ${kind.most}`;
+  const only = kind.least === kind.most;
+  const expected = only ? `the number ${kind.least}` : `a whole number from ${kind.least} to ${kind.most}`;
   if (node.kind !== "scalar") return refuseShape(node, expected, place, context);
   if (!/^[+-]?\d{1,9}$/.test(node.text)) {
     refuseNumber(node.text, node.at, expected, place, context);
@@ -23,7 +24,7 @@ export function readInteger(
     code: "outside-limits",
     at: node.at,
     message: `${place.name} must be ${expected}, got ${node.text}`,
-    label: `${kind.least} to ${kind.most}; typical: ${place.example}`,
+    label: only ? `expected ${kind.least}` : `${kind.least} to ${kind.most}; typical: ${place.example}`,
     fix: place.fix,
   });
   return undefined;

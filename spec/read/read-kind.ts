@@ -11,7 +11,7 @@ import { readDuration, readFree, readQuantity, readRange } from "./read-quantity
 import { readTable } from "./read-table.ts";
 import { isIdentifier, readFlag, readText, readWord } from "./read-text.ts";
 import { refuseShape } from "./refuse-shape.ts";
-import { orList, quote } from "./suggest.ts";
+import { counted, orList, quote, shownName } from "./suggest.ts";
 
 /** Reads a node as its kind says: the value, with holes where something was reported, or undefined. */
 export function readKind(node: Node, kind: Kind, place: Place, name: string, context: Context): unknown {
@@ -62,7 +62,7 @@ function readTuple(node: Node, kind: TupleKind, place: Place, context: Context):
     context.report({
       code: "wrong-table-size",
       at: node.at,
-      message: `${place.name} has ${node.items.length} values`,
+      message: `${place.name} has ${counted(node.items.length, "value")}`,
       label: `expected ${wanted} values`,
       fix: place.fix,
     });
@@ -103,7 +103,7 @@ function readVariants(node: Node, kind: VariantsKind, name: string, context: Con
     return refuseShape(
       node,
       `a map with \`${kind.tag}\``,
-      { name: `\`${name}\``, example: fix, fix },
+      { name: shownName(name), example: fix, fix },
       context,
     );
   const entry = entryOf(node, kind.tag);
@@ -113,7 +113,7 @@ function readVariants(node: Node, kind: VariantsKind, name: string, context: Con
     context.report({
       code: "missing-key",
       at,
-      message: `\`${name}\` has no \`${kind.tag}\``,
+      message: `${shownName(name)} has no \`${kind.tag}\``,
       label,
       fix: place.fix,
     });
@@ -133,7 +133,7 @@ function readVariants(node: Node, kind: VariantsKind, name: string, context: Con
 
 function readShape(node: Node, shapes: Shapes, place: Place, name: string, context: Context): unknown {
   if (node.kind === "scalar" && shapes.words?.words.includes(node.text)) return node.text;
-  const kind: Kind | undefined = shapes[node.kind];
+  const kind: Kind | undefined = node.kind === "unread" ? undefined : shapes[node.kind];
   if (kind !== undefined && !isEmpty(node)) return readKind(node, kind, place, name, context);
   if (node.kind === "scalar" && shapes.words !== undefined && shapes.scalar === undefined)
     return readWord(node, shapes.words.words, place, context);

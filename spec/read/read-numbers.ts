@@ -53,6 +53,7 @@ export function readNumbers(
 export const nth = (index: number, place: Place): Place => ({
   ...place,
   name: `value ${index + 1} of ${place.name}`,
+  fix: "",
 });
 
 function readNumber(

@@ -9,7 +9,7 @@ import { activeUnits, expectedOf } from "./active-units.ts";
 import { checkLimits } from "./check-limits.ts";
 import type { Context, Place } from "./context.ts";
 import { type Match, matchUnit } from "./match-unit.ts";
-import { isDecimal, refuseNumber } from "./number-text.ts";
+import { checkPlain, isDecimal, isGrouped, refuseNumber } from "./number-text.ts";
 import { refuseShape } from "./refuse-shape.ts";
 
 interface Leaf {
@@ -20,6 +20,7 @@ interface Leaf {
 /** Text with its own place: the whole of a scalar or a part of it. */
 interface Piece {
   readonly text: string;
+  readonly quoted: boolean;
   readonly at: Span;
 }
 
@@ -28,7 +29,7 @@ export interface Amount extends Quantity {
   readonly match: Match;
 }
 
-const NUMBER_AND_UNIT = /^([+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?)(?![\d.])\s*(.*)$/s;
+const NUMBER_AND_UNIT = /^([+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?)(?![\d.,_'])\s*(.*)$/s;
 
 /** The line to paste follows the unit that is wanted under the words elsewhere. */
 function withExample(place: Place, leaf: Leaf, context: Context): Place {
@@ -42,10 +43,11 @@ export function readAmount(piece: Piece, leaf: Leaf, given: Place, context: Cont
   const place = withExample(given, leaf, context);
   const text = piece.text.trim().replace(/\s+/g, " ");
   const [, number, unitText] = NUMBER_AND_UNIT.exec(text) ?? [];
-  if (number === undefined || !isDecimal(number)) {
+  if (number === undefined || !isDecimal(number) || isGrouped(text)) {
     refuseNumber(text, piece.at, expectedOf(leaf.units, context), place, context);
     return undefined;
   }
+  if (unitText === "") checkPlain(number, piece, place, context);
   const unitAt =
     unitText === "" ? piece.at : within(piece.at, piece.text.lastIndexOf(unitText), unitText.length);
   const match = matchUnit(unitText, unitAt, leaf.units, place, context);
@@ -60,7 +62,7 @@ function pieceOf(node: Node, expected: string, place: Place, context: Context): 
     refuseShape(node, expected, place, context);
     return undefined;
   }
-  return { text: node.text, at: textSpan(node) };
+  return { text: node.text, quoted: node.quoted, at: textSpan(node) };
 }
 
 /** The span of a scalar's text, inside its quotes. */
@@ -94,8 +96,8 @@ function split(piece: Piece, pattern: RegExp): readonly [Piece, Piece] | undefin
   const lowAt = match[0].indexOf(low, match[0].startsWith("between") ? 7 : 0);
   const highAt = piece.text.lastIndexOf(high);
   return [
-    { text: low, at: within(piece.at, lowAt, low.length) },
-    { text: high, at: within(piece.at, highAt, high.length) },
+    { text: low, quoted: piece.quoted, at: within(piece.at, lowAt, low.length) },
+    { text: high, quoted: piece.quoted, at: within(piece.at, highAt, high.length) },
   ];
 }
 

@@ -7,6 +7,7 @@ import { type Axis, readAxis, refuseKeys } from "./read-axis.ts";
 import { readNumbers, readUnitKey } from "./read-numbers.ts";
 import { refuseShape } from "./refuse-shape.ts";
 import { reportSize } from "./report-size.ts";
+import { counted } from "./suggest.ts";
 
 export function readTable(
   node: Node,
@@ -48,8 +49,8 @@ function readRows(
   if (node === undefined) return undefined;
   if (node.kind !== "list") return refuseShape(node, "a list of rows", place, context);
   if (rows !== undefined && node.items.length !== rows.points.length) {
-    const says = `\`values\` has ${node.items.length} rows for ${rows.points.length} points of \`${rows.over}\``;
-    return reportSize(node.at, says, rows, context);
+    const says = `\`values\` has ${counted(node.items.length, "row")} for ${counted(rows.points.length, "point")} of \`${rows.over}\``;
+    return reportSize(node.at, says, rows, "row", context);
   }
   const read = (node as ListNode).items.map((row, i) =>
     readRow(row, match, kind, columns, { ...place, name: `row ${i + 1}` }, context),
@@ -67,6 +68,6 @@ function readRow(
 ): readonly number[] | undefined {
   const row = readNumbers(node, match, kind.limits, place, context);
   if (row === undefined || columns === undefined || row.length === columns.points.length) return row;
-  const says = `${place.name} has ${row.length} numbers for ${columns.points.length} points of \`${columns.over}\``;
-  return reportSize(node.at, says, columns, context);
+  const says = `${place.name} has ${counted(row.length, "number")} for ${counted(columns.points.length, "point")} of \`${columns.over}\``;
+  return reportSize(node.at, says, columns, "number", context);
 }

@@ -6,6 +6,7 @@ const NAMES = { scalar: "a single value", list: "a list", map: "a map of keys" }
 
 /** Reports a list where a number belongs, and the like. */
 export function refuseShape(node: Node, expected: string, place: Place, context: Context): undefined {
+  if (node.kind === "unread") return undefined;
   const empty = isEmpty(node);
   const got = empty ? "nothing" : node.kind === "scalar" ? quote(node.text) : NAMES[node.kind];
   context.report({

@@ -60,7 +60,7 @@ export function refuseUnit(
 }
 
 function refuseUnknown(part: string, text: string, at: Span, place: Place, context: Context): void {
-  const near = nearestUnit(part);
+  const near = nearestUnit(text) ?? nearestUnit(part);
   context.report({
     code: "unknown-unit",
     at,
@@ -79,7 +79,8 @@ const SPELLINGS: readonly (readonly [RegExp, string])[] = [
   [/[·⋅×]/g, "*"],
   [/^[µμ]/g, "u"],
   [/^sec(onds?)?$/i, "s"],
-  [/^(rev|1)\/min$|^min$/i, "rpm"],
+  [/^(msec|millis(econds?)?)$/i, "ms"],
+  [/^(rev|revs|r|U|1)\/min$/i, "rpm"],
 ];
 
 function nearestUnit(part: string): string | undefined {

@@ -23,6 +23,12 @@ export function orList(names: readonly string[], most = 14): string {
   return shown.length < 2 ? shown.join("") : `${shown.slice(0, -1).join(", ")} or ${shown.at(-1)}`;
 }
 
+/** A key in backticks, a description such as `item 2 of faults` bare. */
+export const shownName = (name: string): string => (name.includes(" ") ? name : `\`${name}\``);
+
+/** `1 number`, `2 numbers`. */
+export const counted = (count: number, word: string): string => `${count} ${word}${count === 1 ? "" : "s"}`;
+
 /** The text in backticks, cut to a readable length. */
 export function quote(text: string, most = 40): string {
   const oneLine = text.replace(/\s+/g, " ");

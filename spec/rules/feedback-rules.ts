@@ -13,6 +13,11 @@ export const checkFeedback: Rule = (seen, report) => {
   checkFeedforward(seen, report);
 };
 
+const usualAntiWindup = (feedback: { readonly schedule: string | undefined }): string => {
+  const unit = feedback.schedule === "per_gauge_pressure" ? "%" : "kPa";
+  return `anti_windup: { method: conditional, band: 10 ${unit}, still_below: 15 ${unit}/s }`;
+};
+
 function checkAntiWindup({ controller: { feedback } }: Seen, report: Report): void {
   if (feedback === undefined) return;
   const integralAt = writtenAt(feedback, "integral");
@@ -23,7 +28,7 @@ function checkAntiWindup({ controller: { feedback } }: Seen, report: Report): vo
       at: integralAt,
       message: "`integral` needs `anti_windup`",
       label: "without it the integral grows while the valve is at its end stop",
-      fix: "anti_windup: { method: conditional, band: 10 %, still_below: 15 %/s }",
+      fix: usualAntiWindup(feedback),
     });
   if (integralAt !== undefined && at !== undefined && feedback.antiWindup?.method === "none")
     report({
@@ -32,7 +37,7 @@ function checkAntiWindup({ controller: { feedback } }: Seen, report: Report): vo
       message: "the integral has no anti-windup",
       label: "it grows while the valve is at its end stop, then overshoots",
       because: [{ at: integralAt, message: "the integral" }],
-      fix: "anti_windup: { method: conditional, band: 10 %, still_below: 15 %/s }",
+      fix: usualAntiWindup(feedback),
     });
   if (integralAt === undefined && at !== undefined && feedback.antiWindup?.method !== "none")
     report({
@@ -96,7 +101,7 @@ function checkTrim({ controller: { feedback } }: Seen, report: Report): void {
     at: feedback.places.trim_limits,
     message: `\`trim_limits\` ${trim.low.written} to ${trim.high.written} exclude 0, where the integral starts`,
     label: "must include 0",
-    fix: "trim_limits: -220 mm2 to 220 mm2",
+    fix: `trim_limits: ${feedback.coordinate === "opening" ? "-20 % to 20 %" : "-220 mm2 to 220 mm2"}`,
   });
 }
 
@@ -154,20 +159,22 @@ function checkArea({ controller }: Seen, report: Report): void {
 }
 
 /** More area means less boost: the area that holds a higher ratio must not be larger. Only the first break is shown. */
-function checkFeedforward({ controller: { feedforward }, at }: Seen, report: Report): void {
+function checkFeedforward({ controller: { feedforward }, at, text }: Seen, report: Report): void {
   if (feedforward === undefined) return;
-  const { rows, columns, values } = feedforward;
+  const { columns, values, rowsOver } = feedforward;
   const width = columns.length;
   const bad = values.findIndex((value, i) => i >= width && value > values[i - width]);
   if (bad === -1) return;
   const [row, column] = [Math.floor(bad / width), bad % width];
-  const over = feedforward.rowsOver.replaceAll("_", " ");
+  const above = ["feedforward", "values", row - 1, column];
+  const here = ["feedforward", "values", row, column];
+  const axis = (index: number): string => text("feedforward", "rows", rowsOver, index);
   report({
     code: "feedforward-not-monotonic",
-    at: at("feedforward", "values", row, column),
-    message: `the feedforward rises from ${short(values[bad - width])} to ${short(values[bad])} as ${over} rises from ${rows[row - 1]} to ${rows[row]}`,
-    label: `at most ${short(values[bad - width])}, the value of the row above`,
-    because: [{ at: at("feedforward", "values", row - 1, column), message: "the value of the row above" }],
+    at: at(...here),
+    message: `the feedforward rises from ${text(...above)} to ${text(...here)} while the ${rowsOver.replaceAll("_", " ")} rises from ${axis(row - 1)} to ${axis(row)}`,
+    label: `at most ${text(...above)}`,
+    because: [{ at: at(...above), message: "the value of the row above" }],
     fix: "a higher boost needs a smaller opening: check the rows' order and the column",
   });
 }

@@ -6,7 +6,7 @@ import { checkFeedback } from "./feedback-rules.ts";
 import { checkGuard } from "./guard-rules.ts";
 import { locate } from "./locate.ts";
 import { checkRequirements } from "./requirement-rules.ts";
-import type { Rule } from "./rule.ts";
+import type { Rule, Seen } from "./rule.ts";
 import { checkScenario } from "./scenario-rules.ts";
 import { checkSignals } from "./signal-rules.ts";
 import { checkTarget } from "./target-rules.ts";
@@ -19,10 +19,13 @@ const CONTROLLER_RULES: readonly Rule[] = [checkTiming, checkSignals, checkTarge
 export function checkLoop(read: HoledLoop, root: Node, plant: PlantSpec | undefined, report: Report): void {
   const { controller, scenarios = [] } = read;
   if (controller !== undefined) {
-    const seen = {
+    const find = (path: readonly (string | number)[]): Node => locate(root, ["controller", ...path]);
+    const textOf = (node: Node): string => (node.kind === "scalar" ? node.text : "");
+    const seen: Seen = {
       controller,
       plant,
-      at: (...path: readonly (string | number)[]) => locate(root, ["controller", ...path]),
+      at: (...path) => find(path).at,
+      text: (...path) => textOf(find(path)),
     };
     for (const rule of CONTROLLER_RULES) rule(seen, report);
   }

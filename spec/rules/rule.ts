@@ -12,6 +12,8 @@ export interface Seen {
   readonly plant: PlantSpec | undefined;
   /** Span of the node at a path below `controller`, for cells of tables; the nearest enclosing node if it is not there. */
   readonly at: (...path: readonly (string | number)[]) => Span;
+  /** Text of the scalar there, as written. */
+  readonly text: (...path: readonly (string | number)[]) => string;
 }
 
 export type Rule = (seen: Seen, report: Report) => void;

@@ -25,14 +25,14 @@ export function decodeSource(file: string, bytes: Uint8Array): DecodeResult {
 }
 
 function refuseBytes(file: string, bytes: Uint8Array): DecodeResult {
-  const good = new TextDecoder("utf-8").decode(bytes.subarray(0, firstBad(bytes)));
-  const lines = good.split("\n");
-  const byte = bytes[firstBad(bytes)]?.toString(16).padStart(2, "0");
+  const bad = firstBad(bytes);
+  const lines = new TextDecoder("utf-8").decode(bytes.subarray(0, bad)).split("\n");
+  const byte = bytes[bad]?.toString(16).padStart(2, "0");
   const says = `byte 0x${byte} is not UTF-8 text`;
   return refuse(file, lines.length, (lines.at(-1) ?? "").length + 1, "not-utf8", says);
 }
 
-/** Index of the first byte that no UTF-8 sequence can have there: the longest decodable prefix ends before it. */
+/** Index of the first byte of the first sequence that is not UTF-8. */
 function firstBad(bytes: Uint8Array): number {
   let [low, high] = [0, bytes.length];
   while (low < high) {
@@ -40,13 +40,14 @@ function firstBad(bytes: Uint8Array): number {
     if (decodes(bytes.subarray(0, middle))) low = middle;
     else high = middle - 1;
   }
-  return low;
+  const unfinished = [0, 1, 2, 3].find((count) => decodes(bytes.subarray(0, low - count), false));
+  return low - (unfinished ?? 0);
 }
 
-/** True for valid text that may end inside a character. */
-function decodes(bytes: Uint8Array): boolean {
+/** True for valid text; `open`: it may end inside a character. */
+function decodes(bytes: Uint8Array, open = true): boolean {
   try {
-    new TextDecoder("utf-8", { fatal: true }).decode(bytes, { stream: true });
+    new TextDecoder("utf-8", { fatal: true }).decode(bytes, { stream: open });
     return true;
   } catch {
     return false;

@@ -1,7 +1,7 @@
 import type { Span } from "../span.ts";
 
 /** A YAML value without YAML: what the readers see. Aliases are already replaced by what they stand for. */
-export type Node = ScalarNode | MapNode | ListNode;
+export type Node = ScalarNode | MapNode | ListNode | UnreadNode;
 
 export interface ScalarNode {
   readonly kind: "scalar";
@@ -20,6 +20,12 @@ export interface Entry {
 export interface MapNode {
   readonly kind: "map";
   readonly entries: readonly Entry[];
+  readonly at: Span;
+}
+
+/** Something is wrong here and reported already: readers pass over it in silence. */
+export interface UnreadNode {
+  readonly kind: "unread";
   readonly at: Span;
 }
 

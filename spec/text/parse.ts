@@ -1,8 +1,10 @@
 import {
+  type Alias,
   Composer,
   CST,
   type Document,
   isAlias,
+  isCollection,
   isMap,
   isScalar,
   isSeq,
@@ -12,6 +14,7 @@ import {
   type Node as YamlNode,
 } from "yaml";
 import type { Report } from "../diagnostics/report.ts";
+import type { Span } from "../span.ts";
 import type { Entry, MapNode, Node } from "./node.ts";
 import { type Positions, positionsOf } from "./positions.ts";
 import type { Source } from "./source.ts";
@@ -23,15 +26,32 @@ const DEEPEST = 60;
 /** Nodes read through aliases in one file: an honest file needs a few hundred. */
 const MOST_ALIAS_NODES = 20_000;
 
+/** Errors after which the rest of the file still means what it says. */
+const HARMLESS: readonly string[] = ["BAD_SCALAR_START"];
+
 interface Work {
   readonly positions: Positions;
   readonly report: Report;
   readonly document: Document;
-  readonly budget: { aliasNodes: number };
+  readonly budget: { aliasNodes: number; exceeded: boolean };
+  /** Where values start that YAML itself could not read. */
+  readonly unread: ReadonlySet<number>;
+}
+
+/** Nodes that are being converted: an alias to one of them would never end. */
+interface Open {
+  readonly nodes: readonly YamlNode[];
+  readonly aliased: boolean;
+}
+
+export interface ParsedText {
+  readonly root: MapNode;
+  /** From here on YAML lost its way: what stands later may not be what was meant. */
+  readonly brokenFrom?: Span;
 }
 
 /** Text to plain nodes with spans. Reports and goes on; undefined when nothing readable is left. Never throws. */
-export function parseText(source: Source, report: Report): MapNode | undefined {
+export function parseSource(source: Source, report: Report): ParsedText | undefined {
   const text = source.text.replace(/^\uFEFF/, "");
   const positions = positionsOf(source.file, text);
   const whole = positions.span(0, 0);
@@ -45,11 +65,30 @@ export function parseText(source: Source, report: Report): MapNode | undefined {
     true,
     text.length,
   );
-  for (const error of document.errors) report(yamlFinding(error, text, positions));
-  return rootOf({ positions, report, document, budget: { aliasNodes: 0 } }, whole, document.errors);
+  const { errors } = document;
+  const broken = errors.filter(({ code }) => !HARMLESS.includes(code));
+  for (const error of withoutConsequences(errors, broken[0])) report(yamlFinding(error, text, positions));
+  const unread = new Set(errors.map(({ pos }) => pos[0]));
+  const budget = { aliasNodes: 0, exceeded: false };
+  const root = rootOf({ positions, report, document, budget, unread }, whole, errors);
+  if (root === undefined || broken.length === 0) return root && { root };
+  return { root, brokenFrom: positions.span(broken[0].pos[0], broken[0].pos[1]) };
 }
 
-function tooLarge(length: number, at: ReturnType<Positions["span"]>, report: Report): undefined {
+/** As `parseSource`, the nodes alone. */
+export const parseText = (source: Source, report: Report): MapNode | undefined =>
+  parseSource(source, report)?.root;
+
+/** What follows a broken place is mostly its consequence: of those errors only the first is shown. */
+const withoutConsequences = (
+  errors: readonly YAMLError[],
+  broken: YAMLError | undefined,
+): readonly YAMLError[] =>
+  errors.filter(
+    (error) => error === broken || HARMLESS.includes(error.code) || error.code === "TAB_AS_INDENT",
+  );
+
+function tooLarge(length: number, at: Span, report: Report): undefined {
   report({
     code: "file-too-large",
     at,
@@ -59,9 +98,10 @@ function tooLarge(length: number, at: ReturnType<Positions["span"]>, report: Rep
   return undefined;
 }
 
-function rootOf(work: Work, whole: Entry["keyAt"], errors: readonly YAMLError[]): MapNode | undefined {
+function rootOf(work: Work, whole: Span, errors: readonly YAMLError[]): MapNode | undefined {
   const { contents } = work.document;
-  const root = contents === null ? undefined : convert(work, contents as YamlNode, []);
+  const root =
+    contents === null ? undefined : convert(work, contents as YamlNode, { nodes: [], aliased: false });
   if (root?.kind === "map") return root;
   if (errors.length > 0) return undefined;
   work.report({
@@ -118,48 +158,55 @@ function innerTokens(token: CST.Token): CST.Token[] {
   return token.items.flatMap((item) => [item.key, item.value]).filter((each) => each != null);
 }
 
-function convert(work: Work, node: YamlNode, chain: readonly YamlNode[]): Node {
+function convert(work: Work, node: YamlNode, open: Open): Node {
   const [start, end] = (node.range ?? [0, 0, 0]) as Range;
   const at = work.positions.span(start, Math.max(end, start));
-  if (isAlias(node)) return convertAlias(work, node, at, chain);
-  if (chain.length > 0) work.budget.aliasNodes += 1;
-  if (isMap(node)) return { kind: "map", entries: convertEntries(work, node.items, chain), at };
+  if (isAlias(node)) return convertAlias(work, node, at, open);
+  if (work.unread.has(start) && (isScalar(node) || isFlow(node))) return { kind: "unread", at };
+  if (open.aliased) work.budget.aliasNodes += 1;
+  const inside = { ...open, nodes: [...open.nodes, node] };
+  if (isMap(node)) return { kind: "map", entries: convertEntries(work, node.items, inside), at };
   if (isSeq(node))
-    return { kind: "list", items: node.items.map((item) => convert(work, item as YamlNode, chain)), at };
-  if (!isScalar(node)) return { kind: "scalar", text: "", quoted: false, at };
+    return { kind: "list", items: node.items.map((item) => convert(work, item as YamlNode, inside)), at };
+  if (!isScalar(node)) return { kind: "unread", at };
   const quoted = node.type !== "PLAIN" && node.type !== undefined;
   const text = typeof node.value === "string" ? node.value : (node.source ?? "");
   return { kind: "scalar", text, quoted, at };
 }
 
-function convertAlias(work: Work, alias: YamlNode, at: Node["at"], chain: readonly YamlNode[]): Node {
-  const empty: Node = { kind: "scalar", text: "", quoted: false, at };
-  const target = isAlias(alias) ? alias.resolve(work.document) : undefined;
-  const name = isAlias(alias) ? alias.source : "";
-  if (target === undefined || chain.includes(target)) {
-    work.report({ code: "unknown-alias", at, message: `no anchor \`&${name}\` stands before this alias` });
-    return empty;
-  }
-  if (work.budget.aliasNodes > MOST_ALIAS_NODES) {
+const isFlow = (node: YamlNode): boolean => isCollection(node) && node.flow === true;
+
+function convertAlias(work: Work, alias: Alias, at: Span, open: Open): Node {
+  const target = alias.resolve(work.document);
+  if (target === undefined || open.nodes.includes(target))
+    work.report({
+      code: "unknown-alias",
+      at,
+      message: `no anchor \`&${alias.source}\` stands before this alias`,
+      label: target === undefined ? "the anchor is missing" : "the alias stands inside its own anchor",
+    });
+  else if (work.budget.aliasNodes <= MOST_ALIAS_NODES)
+    return convert(work, target, { ...open, aliased: true });
+  else if (!work.budget.exceeded) {
+    work.budget.exceeded = true;
     work.report({
       code: "alias-bomb",
       at,
       message: `aliases expand to more than ${MOST_ALIAS_NODES} values`,
       fix: "write the values out",
     });
-    return empty;
   }
-  return convert(work, target, [...chain, target]);
+  return { kind: "unread", at };
 }
 
 function convertEntries(
   work: Work,
   items: readonly { readonly key: unknown; readonly value: unknown }[],
-  chain: readonly YamlNode[],
+  open: Open,
 ): Entry[] {
   const seen = new Map<string, Entry>();
   for (const item of items) {
-    const entry = convertEntry(work, item.key as YamlNode, item.value as YamlNode | null, chain);
+    const entry = convertEntry(work, item.key as YamlNode, item.value as YamlNode | null, open);
     const before = entry === undefined ? undefined : seen.get(entry.key);
     if (entry === undefined) continue;
     if (before === undefined) seen.set(entry.key, entry);
@@ -179,14 +226,15 @@ function convertEntry(
   work: Work,
   keyNode: YamlNode,
   valueNode: YamlNode | null,
-  chain: readonly YamlNode[],
+  open: Open,
 ): Entry | undefined {
-  const key = convert(work, keyNode, chain);
+  const key = convert(work, keyNode, open);
+  if (key.kind === "unread") return undefined;
   if (key.kind !== "scalar") {
     work.report({ code: "key-not-text", at: key.at, message: "a key must be a plain word" });
     return undefined;
   }
-  const value = valueNode === null ? undefined : convert(work, valueNode, chain);
+  const value = valueNode === null ? undefined : convert(work, valueNode, open);
   return {
     key: key.text,
     keyAt: key.at,

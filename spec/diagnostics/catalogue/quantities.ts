@@ -47,7 +47,7 @@ export const QUANTITY_CODES = {
   },
   "temperature-scale-in-compound": {
     severity: "error",
-    cause: "degC and degF have a shifted zero, so they cannot be part of a compound unit.",
+    cause: "The scales degC and degF have a shifted zero, so they cannot be part of a compound unit.",
     example: "wall_loss: 8 W/degC",
     fix: "Use K: `8 W/K`. A difference of 1 degC is 1 K.",
   },
