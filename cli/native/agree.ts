@@ -63,13 +63,16 @@ const buildAll = async (folder: NativeFolder, program: Program, builds: readonly
   );
 };
 
-/** Prints, loads and compiles a controller for every target. */
+type Files = ReadonlyMap<string, string>;
+
+/** Prints, loads and compiles a controller for every target. `change` lets a test break the C on purpose. */
 export const prepareAgreement = async (
   program: Program,
   builds: readonly NativeBuild[],
+  change: (files: Files) => Files = (files) => files,
 ): Promise<AgreementSubject> => {
   const files = new Map([...printC(program), [`${program.name}_record.c`, printHarness(program)]]);
-  const folder = await writeSources(files);
+  const folder = await writeSources(change(files));
   return {
     program,
     interpreter: interpretedModule(program),

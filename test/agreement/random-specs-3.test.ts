@@ -1,0 +1,3 @@
+import { agreementShard } from "./shard.ts";
+
+agreementShard(3, 50);
