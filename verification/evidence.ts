@@ -136,6 +136,7 @@ export interface MarginDistribution {
 /** Sampled every `stepS` from time 0; every array has the same length. Base units of TRACE_SIGNALS. */
 export interface WorstTrace {
   readonly scenario: string;
+  readonly kind: "random" | "corner";
   readonly run: number;
   readonly stepS: number;
   readonly signals: Partial<Readonly<Record<TraceSignal, readonly number[]>>>;
