@@ -38,6 +38,11 @@ export function plural(count: number, one: string, many = `${one}s`): string {
   return `${whole(count)} ${count === 1 ? one : many}`;
 }
 
+/** The text as a sentence of its own. */
+export function sentence(text: string): string {
+  return /[.!?]\s*$/.test(text) ? text : `${text}.`;
+}
+
 export function count(evidence: Evidence, verdict: Verdict): number {
   return evidence.requirements.filter((result) => result.verdict === verdict).length;
 }

@@ -1,7 +1,13 @@
 import type { Evidence, MapPoint, RequirementResult, WorstTrace } from "../../../verification/evidence.ts";
 
 /** An invented tip-in, shaped like one: the page needs something to draw, no test reads physics out of it. */
-export function sampleTrace(scenario: string, run: number, samples = 401, stepS = 0.01): WorstTrace {
+export function sampleTrace(
+  scenario: string,
+  run: number,
+  kind: WorstTrace["kind"] = "random",
+  samples = 401,
+  stepS = 0.01,
+): WorstTrace {
   const times = Array.from({ length: samples }, (_, i) => i * stepS);
   const rise = (t: number, start: number, tau: number): number =>
     t < start ? 0 : 1 - Math.exp((start - t) / tau);
@@ -12,6 +18,7 @@ export function sampleTrace(scenario: string, run: number, samples = 401, stepS 
   const flow = boost.map((p) => 0.03 + 0.0011 * (p - 100));
   return {
     scenario,
+    kind,
     run,
     stepS,
     signals: {

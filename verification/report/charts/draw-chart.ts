@@ -4,7 +4,6 @@ import { parseHTML } from "linkedom";
 /** The little of a drawn element that is used here. */
 interface DrawnElement {
   readonly outerHTML: string;
-  readonly attributes: ArrayLike<{ readonly name: string; readonly value: string }>;
   setAttribute(name: string, value: string): void;
   removeAttribute(name: string): void;
   remove(): void;
@@ -24,15 +23,14 @@ function renumber(value: string, ids: Map<string, string>, prefix: string): stri
   });
 }
 
-function tidy(svg: DrawnElement, prefix: string): void {
+/** Serialised text holds no bare `<` or `>`, so that only tags are touched. */
+function tidy(markup: string, prefix: string): string {
   const ids = new Map<string, string>();
-  for (const element of [svg, ...svg.querySelectorAll("*")]) {
-    for (const { name, value } of Array.from(element.attributes)) {
-      const kept = name === "aria-label" || name.startsWith("data-");
-      const tidied = renumber(kept ? value : roundDecimals(value), ids, prefix);
-      if (tidied !== value) element.setAttribute(name, tidied);
-    }
-  }
+  const tidyAttribute = (whole: string, name: string, value: string): string => {
+    if (name === "aria-label" || name.startsWith("data-")) return whole;
+    return `${name}="${renumber(roundDecimals(value), ids, prefix)}"`;
+  };
+  return markup.replace(/<[^>]*>/g, (tag) => tag.replace(/([\w-]+)="([^"]*)"/g, tidyAttribute));
 }
 
 /** `data-` attributes of a chart, for the script. */
@@ -49,6 +47,5 @@ export function drawChart(options: PlotOptions, prefix: string, y = 0, data: Cha
   for (const attribute of ["font-family", "font-size", "class", "fill"]) svg.removeAttribute(attribute);
   svg.setAttribute("y", String(y));
   for (const [name, value] of Object.entries(data)) svg.setAttribute(`data-${name}`, String(value));
-  tidy(svg, prefix);
-  return svg.outerHTML;
+  return tidy(svg.outerHTML, prefix);
 }

@@ -17,12 +17,16 @@ import type { Picture } from "./picture.ts";
 
 const SIZES = { width: 760, marginLeft: 250, marginRight: 16, marginTop: 28, marginBottom: 36 } as const;
 const ROW = 20;
+/** What lies far from the edge needs no place: longer bars are cut here. */
+const MOST_SHOWN = 1.5;
 const LONGEST_LABEL = 38;
 
 interface Row {
   readonly key: string;
   readonly label: string;
   readonly least: number;
+  /** Worst corner run; NaN when there is none. */
+  readonly corner: number;
   readonly low: number;
   readonly median: number;
   readonly high: number;
@@ -40,7 +44,12 @@ function rowOf(result: RequirementResult, i: number): Row[] {
   if (quantiles === undefined || !Object.values(quantiles).every(Number.isFinite)) return [];
   const label = shortened(`${result.id} / ${result.scenario}`);
   const { least, p05, median, p95 } = quantiles;
-  return [{ key: String(i), label, least, low: p05, median, high: p95 }];
+  const corner = result.corners.worst?.margin ?? Number.NaN;
+  return [{ key: String(i), label, least, corner, low: p05, median, high: p95 }];
+}
+
+function atMargin(field: "least" | "corner") {
+  return { y: "key", x: (row: Row) => Math.min(row[field], MOST_SHOWN) };
 }
 
 function rowMarks(rows: readonly Row[]): Markish[] {
@@ -49,11 +58,13 @@ function rowMarks(rows: readonly Row[]): Markish[] {
       y: "key",
       x1: "low",
       x2: "high",
+      clip: true,
       stroke: colour("blue"),
       strokeWidth: 5,
       strokeOpacity: 0.5,
     }),
     tickX(rows, {
+      clip: true,
       y: "key",
       x: "median",
       stroke: colour("ink"),
@@ -62,20 +73,25 @@ function rowMarks(rows: readonly Row[]): Markish[] {
       insetBottom: 3,
     }),
     dot(rows, {
-      y: "key",
-      x: "least",
+      ...atMargin("least"),
       r: 4,
       symbol: "diamond",
-      fill: (row: Row) => (row.least < 0 ? colour("ink") : colour("paper")),
+      fill: colour("paper"),
       stroke: colour("ink"),
-      strokeWidth: 1.4,
     }),
+    dot(rows, { ...atMargin("corner"), r: 3.5, symbol: "times", stroke: colour("ink"), strokeWidth: 1.6 }),
   ];
 }
 
 function overviewChart(rows: readonly Row[], height: number): PlotOptions {
-  const least = rows.reduce((a, row) => Math.min(a, row.least), 0);
-  const most = rows.reduce((a, row) => Math.max(a, row.high), 1);
+  const least = rows.reduce(
+    (a, row) => Math.min(a, row.least, Number.isFinite(row.corner) ? row.corner : 0),
+    0,
+  );
+  const most = Math.min(
+    rows.reduce((a, row) => Math.max(a, row.high), 1),
+    MOST_SHOWN,
+  );
   const labels = new Map(rows.map(({ key, label }) => [key, label]));
   const words = "margin (0: the edge, negative: violated)";
   return {

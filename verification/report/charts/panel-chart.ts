@@ -6,8 +6,8 @@ import { dropLevel, thinOut } from "./thin-out.ts";
 import type { Panel, PanelLimit, PanelLine } from "./trace-panels.ts";
 import type { TracePlot } from "./trace-plot.ts";
 
-/** Stretches a line is thinned to: about one per three pixels. */
-const BUCKETS = 260;
+/** Stretches a line is thinned to: about one per three pixels, each with its least and its most. */
+const BUCKETS = 220;
 const BOTTOM = 6;
 const BOTTOM_WITH_AXIS = 34;
 

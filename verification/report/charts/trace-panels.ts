@@ -73,8 +73,8 @@ export const PANELS: readonly Panel[] = [
     range: [-4, 104],
     leastSpan: 100,
     lines: [
-      { signal: "accelerator", name: "accelerator", role: "input" },
       { signal: "torque_limit", name: "torque limit", role: "actual" },
+      { signal: "accelerator", name: "accelerator", role: "input" },
     ],
     limits: [],
   },

@@ -1,10 +1,12 @@
 import type { Evidence, RequirementResult, WorstRun } from "../../evidence.ts";
+import { byVerdict } from "../by-verdict.ts";
 import { binsOf, histogramPicture } from "../charts/histogram-picture.ts";
 import { figureBox, tableBox, type ValueTable } from "../figure.ts";
 import { code, type Html, html, name } from "../html.ts";
 import { figure, margin, whole } from "../numbers.ts";
+import { replayCommand } from "../replay-command.ts";
 import { slug } from "../slug.ts";
-import { cornerSentence, testedSentence, verdictMark } from "../words.ts";
+import { cornerSentence, sentence, testedSentence, verdictMark } from "../words.ts";
 
 function traceLink(evidence: Evidence, worst: WorstRun): Html | undefined {
   if (worst.trace === undefined || evidence.traces[worst.trace] === undefined) return undefined;
@@ -46,14 +48,14 @@ function plural(runs: number): string {
 function counterexample(file: string | undefined): Html | undefined {
   return file === undefined
     ? undefined
-    : html`<p>Smallest manoeuvre found that violates it, again: ${code(`spoolwright replay ${file}`)}</p>`;
+    : html`<p>Smallest manoeuvre found that violates it, again: ${replayCommand(file)}</p>`;
 }
 
 function detail(evidence: Evidence, result: RequirementResult, index: number): Html {
   const id = slug("requirement", index);
   return html`<article id="${id}" aria-labelledby="${id}-title">
 <h3 id="${id}-title">${name(result.id)} <span class="on">on ${name(result.scenario)}</span></h3>
-<p>${verdictMark(result.verdict)} ${name(result.says)}</p>
+<p>${verdictMark(result.verdict)} ${name(sentence(result.says))}</p>
 <p>${testedSentence(result)} ${cornerSentence(result)}</p>
 <p class="source">Pattern ${code(result.pattern)}, written at ${name(`${result.at.file}:${result.at.line}`)}; the
 scenario at line ${result.scenarioLine}.</p>
@@ -69,5 +71,5 @@ export function requirementDetails(evidence: Evidence): Html | undefined {
   if (evidence.requirements.length === 0) return undefined;
   return html`<section id="details" aria-labelledby="details-title">
 <h2 id="details-title">Each requirement</h2>
-${evidence.requirements.map((result, i) => detail(evidence, result, i))}</section>`;
+${byVerdict(evidence).map(({ result, index }) => detail(evidence, result, index))}</section>`;
 }

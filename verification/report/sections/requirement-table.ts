@@ -1,4 +1,5 @@
 import type { Evidence, RequirementResult } from "../../evidence.ts";
+import { byVerdict, type Placed } from "../by-verdict.ts";
 import { marginOverviewPicture } from "../charts/margin-overview-picture.ts";
 import { pictureMarkup } from "../charts/picture.ts";
 import { code, type Html, html, name, trusted } from "../html.ts";
@@ -16,7 +17,7 @@ function worstMargin(worst: { readonly margin: number } | undefined): string {
   return worst === undefined ? NONE : margin(worst.margin);
 }
 
-function row(result: RequirementResult, index: number, specFile: string): Html {
+function row({ result, index }: Placed, specFile: string): Html {
   const { corners, at } = result;
   return html`<tr class="${result.verdict}">
 <th scope="row"><a href="#${slug("requirement", index)}">${name(result.id)}</a> <span class="on">on ${name(result.scenario)}</span>
@@ -47,18 +48,22 @@ const HEAD = [
 const WORDS = new Set(["verdict", "kind", "line"]);
 
 function overview(evidence: Evidence): Html | undefined {
-  const picture = marginOverviewPicture("margins", evidence.requirements);
+  const picture = marginOverviewPicture(
+    "margins",
+    byVerdict(evidence).map(({ result }) => result),
+  );
   if (picture === undefined) return undefined;
   return html`<figure id="margins-figure">
 <div class="box" role="region" tabindex="0" aria-label="${picture.title}">${trusted(pictureMarkup(picture))}</div>
-<figcaption>Margins of the random runs. Bar: 5th to 95th percentile; upright line: median; diamond: the worst run,
-solid when it is a violation. The table of requirements above and the details below give the same values.</figcaption>
+<figcaption>Margins of the random runs. Bar: 5th to 95th percentile; upright line: median; diamond: the worst random
+run; cross: the worst corner run. Left of the broken line: violated. Margins above 1.5 stand at the right end. The
+table of requirements above and the details below give the same values.</figcaption>
 </figure>`;
 }
 
 /** Every requirement on every scenario: one row each. */
 export function requirementTable(evidence: Evidence): Html {
-  const rows = evidence.requirements.map((result, i) => row(result, i, evidence.controller.specFile));
+  const rows = byVerdict(evidence).map((placed) => row(placed, evidence.controller.specFile));
   return html`<section id="requirements" aria-labelledby="requirements-title">
 <h2 id="requirements-title">Requirements</h2>
 <p>A margin of 1 is comfortable by the whole allowance, 0 is the edge, negative is a violation. Margins are rounded

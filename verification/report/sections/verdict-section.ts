@@ -1,8 +1,10 @@
-import type { Evidence, RequirementResult } from "../../evidence.ts";
-import { code, type Html, html, name } from "../html.ts";
+import type { Evidence, RequirementResult, WorstRun } from "../../evidence.ts";
+import { byVerdict, type Placed } from "../by-verdict.ts";
+import { type Html, html, name } from "../html.ts";
 import { margin } from "../numbers.ts";
+import { replayCommand } from "../replay-command.ts";
 import { slug } from "../slug.ts";
-import { count, overallVerdict, plural, verdictShape } from "../words.ts";
+import { count, overallVerdict, plural, sentence, verdictShape } from "../words.ts";
 
 /** A requirement is listed once for each of its scenarios. */
 function countOfIds(results: readonly RequirementResult[]): number {
@@ -22,26 +24,25 @@ function headline(evidence: Evidence): string {
   return `No violation found: ${plural(all, "requirement")} tested.${rest}`;
 }
 
-function violation(result: RequirementResult, index: number): Html {
-  const worst = result.worst?.margin ?? result.corners.worst?.margin;
+function lowest(worst: WorstRun | undefined): string {
+  return worst === undefined ? "" : `, lowest margin ${margin(worst.margin)}`;
+}
+
+function violation({ result, index }: Placed): Html {
+  const { corners, counterexample } = result;
   return html`<li><a href="#${slug("requirement", index)}">${name(result.id)}</a> on ${name(result.scenario)}:
-${name(result.says)}. ${plural(result.violations, "violation")} in ${plural(result.exercised, "random run")},
-${plural(result.corners.violations, "violation")} in ${plural(result.corners.exercised, "corner run")}${
-    worst === undefined ? "" : html`; worst margin ${margin(worst)}`
-  }.${
-    result.counterexample === undefined
+${name(sentence(result.says))} ${plural(result.violations, "violation")} in ${plural(result.exercised, "random run")}${lowest(result.worst)};
+${plural(corners.violations, "violation")} in ${plural(corners.exercised, "corner run")}${lowest(corners.worst)}.${
+    counterexample === undefined
       ? undefined
-      : html`
-Replay the smallest manoeuvre found: ${code(`spoolwright replay ${result.counterexample}`)}`
+      : html` Replay the smallest manoeuvre found: ${replayCommand(counterexample)}`
   }</li>`;
 }
 
 /** The answer, before anything else: one sentence with its shape, then what is violated and how to see it again. */
 export function verdictSection(evidence: Evidence): Html {
   const overall = overallVerdict(evidence);
-  const violated = evidence.requirements.flatMap((result, i) =>
-    result.verdict === "violated" ? [violation(result, i)] : [],
-  );
+  const violated = byVerdict(evidence).filter(({ result }) => result.verdict === "violated");
   return html`<section id="verdict" aria-labelledby="verdict-title">
 <h2 id="verdict-title">Verdict</h2>
 <p class="headline ${overall}">${verdictShape(overall)}<span>${headline(evidence)}</span></p>
@@ -50,6 +51,6 @@ ${plural(evidence.runsPerScenario, "run")} each, all of the kind <em>tested</em>
 ${plural(evidence.extraSimulations.corner, "corner run")} and
 ${plural(evidence.extraSimulations.shrink, "run")} spent on making counterexamples smaller.
 Nothing here is proved or searched.</p>
-${violated.length === 0 ? undefined : html`<ul class="violations">${violated}</ul>`}
+${violated.length === 0 ? undefined : html`<ul class="violations">${violated.map(violation)}</ul>`}
 </section>`;
 }

@@ -12,11 +12,15 @@ import { spreadIndices, traceTable } from "../trace-table.ts";
 const TIMES = 9;
 const TABLE_TIMES = 25;
 
+function titled(trace: WorstTrace): string {
+  return `${trace.kind === "corner" ? "Corner" : "Random"} run ${trace.run} of ${trace.scenario}`;
+}
+
 function plotOf(evidence: Evidence, trace: WorstTrace, index: number): TracePlot {
   const lengths = Object.values(trace.signals).map((values) => values.length);
   return {
     id: slug("trace", index),
-    title: `Run ${trace.run} of ${trace.scenario}`,
+    title: titled(trace),
     stepS: trace.stepS,
     length: Math.max(trace.mode.length, ...lengths),
     signals: trace.signals,
@@ -49,7 +53,7 @@ function points(trace: WorstTrace): MapPoint[] {
 function onTheMap(map: CompressorMap, trace: WorstTrace, index: number): Html | undefined {
   const path = points(trace);
   if (path.length === 0) return undefined;
-  const title = `Run ${trace.run} of ${trace.scenario} on the compressor map`;
+  const title = `${titled(trace)} on the compressor map`;
   const time = (i: number, places: number): string => decimals(i * trace.stepS, places);
   const labels = spreadIndices(path.length, TIMES).map((i) => ({ index: i, text: `${time(i, 1)} s` }));
   const track = { name: "the run", role: "actual", points: path, labels } as const;
@@ -69,12 +73,36 @@ function onTheMap(map: CompressorMap, trace: WorstTrace, index: number): Html | 
   );
 }
 
+/** The lowest margin that has this trace as its worst run. */
+function leastMargin(evidence: Evidence, index: number): number {
+  return evidence.requirements
+    .flatMap(({ worst, corners }) => [worst, corners.worst])
+    .reduce((least, worst) => (worst?.trace === index ? Math.min(least, worst.margin) : least), Infinity);
+}
+
+/** True for the run with the lowest margin of its scenario, the first of equals. */
+function isWorstOfScenario(evidence: Evidence, index: number): boolean {
+  const { scenario } = evidence.traces[index];
+  const own = leastMargin(evidence, index);
+  return evidence.traces.every((other, i) => {
+    if (other.scenario !== scenario || i === index) return true;
+    const least = leastMargin(evidence, i);
+    return own < least || (own === least && index < i);
+  });
+}
+
+/** Indices of the traces, the lowest margin first. */
+function lowestFirst(evidence: Evidence): number[] {
+  const margins = evidence.traces.map((_, i) => leastMargin(evidence, i));
+  return [...margins.keys()].sort((a, b) => margins[a] - margins[b] || a - b);
+}
+
 function run(evidence: Evidence, trace: WorstTrace, index: number): Html {
   const id = slug("run", index);
   const plot = plotOf(evidence, trace, index);
-  const map = evidence.compressorMap;
+  const map = isWorstOfScenario(evidence, index) ? evidence.compressorMap : undefined;
   return html`<article id="${id}" aria-labelledby="${id}-title">
-<h3 id="${id}-title">${name(trace.scenario)} <span class="on">run ${whole(trace.run)}</span></h3>
+<h3 id="${id}-title">${name(trace.scenario)} <span class="on">${trace.kind} run ${whole(trace.run)}</span></h3>
 ${reasons(evidence, index)}
 ${figureBox(
   tracePicture(plot),
@@ -89,6 +117,7 @@ ${map === undefined ? undefined : onTheMap(map, trace, index)}
 export function worstRuns(evidence: Evidence): Html {
   return html`<section id="runs" aria-labelledby="runs-title">
 <h2 id="runs-title">Worst runs</h2>
-${evidence.traces.length === 0 ? html`<p>The evidence holds no traces.</p>` : evidence.traces.map((trace, i) => run(evidence, trace, i))}
+<p>The lowest margin first. Of each scenario, the run with the lowest margin is also shown on the compressor map.</p>
+${evidence.traces.length === 0 ? html`<p>The evidence holds no traces.</p>` : lowestFirst(evidence).map((i) => run(evidence, evidence.traces[i], i))}
 </section>`;
 }
