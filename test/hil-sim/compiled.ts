@@ -19,7 +19,7 @@ export function runCompiled(program: string): unknown {
     };
     writeFileSync(join(folder, "tsconfig.json"), JSON.stringify(config));
     writeFileSync(join(folder, "package.json"), '{ "type": "module" }');
-    symlinkSync(join(ROOT, "node_modules"), join(folder, "node_modules"));
+    for (const name of ["node_modules", "examples"]) symlinkSync(join(ROOT, name), join(folder, name));
     execFileSync(join(ROOT, "node_modules/.bin/tsc"), ["-p", join(folder, "tsconfig.json")], { cwd: folder });
     const built = join(folder, "test/hil-sim", program.replace(/\.ts$/, ".js"));
     return JSON.parse(execFileSync(process.execPath, ["--expose-gc", built], { encoding: "utf8" }));

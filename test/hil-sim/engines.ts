@@ -1,111 +1,14 @@
-import type { PlantSpec } from "../../spec/plant-spec.ts";
+import { readFileSync } from "node:fs";
+import { type PlantSpec, readPlant } from "../../spec/index.ts";
 
-const at = { file: "engines.ts", line: 1, column: 1, endLine: 1, endColumn: 1 };
-const rpm = Math.PI / 30;
+function readEngine(name: string): PlantSpec {
+  const file = `examples/${name}/${name}.plant.yaml`;
+  const text = readFileSync(new URL(`../../${file}`, import.meta.url), "utf8");
+  const { plant, diagnostics } = readPlant({ file, text });
+  if (plant === undefined) throw new Error(diagnostics.map(({ message }) => message).join("; "));
+  return plant;
+}
 
-/** The invented four-cylinder of the example plant file, as an object. */
-export const engineA: PlantSpec = {
-  name: "skarn24",
-  description: "invented 2.4 l four, one turbo",
-  turbo: { count: 1, speedLimit: 165000 * rpm },
-  engine: {
-    displacement: 0.0024,
-    compressionRatio: 9.5,
-    volumetricEfficiency: [0.676, 1.047e-3, -1.0e-6],
-    stoichiometricRatio: 14.6,
-    lambda: 0.85,
-    indicatedEfficiency: 0.33,
-    heatingValue: 43e6,
-    friction: [14, 0.01, 6e-5],
-  },
-  volumes: { boost: 0.01, intake: 0.006, exhaust: 0.003 },
-  losses: { airFilter: 8.7e6, intercooler: 5.0e7, exhaust: 1.0e7 },
-  compressor: {
-    tipRadius: 0.031,
-    referenceTipSpeed: 500,
-    peakHead: 0.62,
-    shutoffHead: 0.42,
-    machLoss: 0.14,
-    peakFlow: [0.005, 0.09],
-    chokeFlow: [0.14, 0.33, -0.02],
-    chokePressureRatio: [0.3, 0.85],
-    tangentFrom: 0.98,
-    reverseFlow: 0.35,
-    flowTimeConstant: 0.004,
-    workSlip: 0.9,
-    workSlope: 0.85,
-    mapReference: [298, 1e5],
-  },
-  intercooler: { effectiveness: 0.86, effectivenessSlope: 0.45, coolantRise: 4, timeConstant: 2 },
-  inlet: { mixingTimeConstant: 0.05, mixingFlow: 0.002 },
-  intake: { heating: 6 },
-  exhaust: {
-    temperatureBase: 980,
-    temperatureRise: 300,
-    temperatureFlow: 0.06,
-    motoredRise: 170,
-    wallFlow: 0.02,
-    gasTimeConstant: 0.03,
-    wallHeatCapacity: 2750,
-    wallLoss: 8,
-    outletTimeConstant: 0.015,
-  },
-  turbine: { flow: 3.4e-5, efficiency: 0.78, tipRadius: 0.028, bestSpeedRatio: 0.65, linearAbove: 0.94 },
-  rotor: { inertia: 8.5e-5, friction: 2.0e-6 },
-  wastegate: {
-    leakArea: 4e-6,
-    portArea: 7.0e-4,
-    curtainFactor: 2,
-    stallPressure: 3.2e5,
-    deadZone: 0.004,
-    timeConstant: 0.03,
-    rate: 8,
-  },
-  throttle: { leakArea: 2.2e-5, area: 2.6e-3, timeConstant: 0.04, rate: 12 },
-  bypass: { area: 6.0e-4, timeConstant: 0.02 },
-  vehicle: { load: [30, 3e-4], inertia: 1.6 },
-  sensors: {
-    boostPressure: { timeConstant: 0.008, noise: 400, range: [0, 4e5], bits: 12, bias: 0 },
-    ambientPressure: { timeConstant: 0.05, noise: 50, range: [0, 1.2e5], bits: 12, bias: 0 },
-    manifoldPressure: { timeConstant: 0.008, noise: 400, range: [0, 4e5], bits: 12, bias: 0 },
-    turboSpeed: { pulsesPerRevolution: 6, window: 0.01 },
-    chargeTemperature: { timeConstant: 3, step: 0.5 },
-    inletTemperature: { timeConstant: 3, step: 0.5 },
-    engineSpeed: { step: rpm },
-  },
-  validity: { engineSpeed: [900 * rpm, 7600 * rpm], pressureRatio: [0.9, 3.6], tipSpeed: [0, 560] },
-  places: new Map(),
-  at,
-};
-
-/** The invented V6 of the example plant file, as an object: two turbos, values per turbo. */
-export const engineB: PlantSpec = {
-  ...engineA,
-  name: "skarn30",
-  description: "invented 3.0 l V6, two turbos",
-  turbo: { count: 2, speedLimit: 208000 * rpm },
-  engine: { ...engineA.engine, displacement: 0.003, friction: [18, 0.01, 8e-5] },
-  volumes: { boost: 0.014, intake: 0.008, exhaust: 0.0019 },
-  losses: { airFilter: 8.7e6 / 0.38, intercooler: 5.0e7 / 0.38, exhaust: 1.0e7 / 0.38 },
-  compressor: {
-    ...engineA.compressor,
-    tipRadius: 0.0245,
-    peakFlow: [0.005 * 0.62, 0.09 * 0.62],
-    chokeFlow: [0.14 * 0.62, 0.33 * 0.62, -0.02 * 0.62],
-    workSlope: 0.85 / 0.62,
-  },
-  intercooler: { ...engineA.intercooler, effectivenessSlope: 0.45 / 0.58 },
-  exhaust: {
-    ...engineA.exhaust,
-    temperatureFlow: 0.08,
-    wallFlow: 0.025,
-    wallHeatCapacity: 3600,
-    wallLoss: 12,
-  },
-  turbine: { ...engineA.turbine, flow: 2.108e-5, tipRadius: 0.0222 },
-  rotor: { inertia: 2.65e-5, friction: 8e-7 },
-  wastegate: { ...engineA.wastegate, leakArea: 3e-6, portArea: 4.34e-4 },
-  throttle: { ...engineA.throttle, leakArea: 2.6e-5, area: 3.2e-3 },
-  bypass: { area: 8.0e-4, timeConstant: 0.02 },
-  vehicle: { load: [30, 3e-4], inertia: 2.0 },
-};
+/** The invented four-cylinder and the invented V6 of the example plant files. */
+export const engineA = readEngine("skarn24");
+export const engineB = readEngine("skarn30");
