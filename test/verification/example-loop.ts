@@ -1,8 +1,8 @@
-import { readFileSync } from "node:fs";
-import { lowerSpec } from "../../generator/lowering/lower-spec.ts";
+import { readdirSync, readFileSync } from "node:fs";
+import { lowerSpec } from "../../generator/index.ts";
 import type { ControllerPort } from "../../hil-sim/index.ts";
 import { type LoopSpec, readLoopSpec } from "../../spec/index.ts";
-import { portFromRuntime } from "../../verification/controllers/runtime-port.ts";
+import { compileController, type GeneratedController, portFromRuntime } from "../../verification/index.ts";
 
 const FOLDER = "examples/skarn24/";
 const NAME = "skarn24.yaml";
@@ -21,3 +21,16 @@ export function exampleLoop(text = exampleText()): LoopSpec {
 
 /** The runtime as the example's controller, in double precision. */
 export const runtimePort = (loop: LoopSpec): ControllerPort => portFromRuntime(lowerSpec(loop, ""));
+
+/** The text of the runtime's files, by name. */
+const runtimeText = (): Map<string, string> => {
+  const names = readdirSync("runtime").filter((name) => name.endsWith(".ts"));
+  return new Map(names.sort().map((name) => [name, readFileSync(`runtime/${name}`, "utf8")]));
+};
+
+/** The generated TypeScript of a loop's controller; throws when the generator refuses it. */
+export function generatedController(loop: LoopSpec): GeneratedController {
+  const { controller, refusals } = compileController(lowerSpec(loop, ""), runtimeText());
+  if (controller === undefined) throw new Error(JSON.stringify(refusals[0]));
+  return controller;
+}
