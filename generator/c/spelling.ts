@@ -1,6 +1,6 @@
 import type { OperatorName } from "../ir/operators.ts";
 import type { Precision } from "../lowered.ts";
-import { atom, called, infix, operand, prefix, type Spelling, selection } from "../print/dialect.ts";
+import { atom, called, chained, infix, operand, prefix, type Spelling, selection } from "../print/dialect.ts";
 
 /** How C says each operator of the language. */
 export const cSpelling = (precision: Precision): Readonly<Record<OperatorName, Spelling>> => {
@@ -34,8 +34,8 @@ export const cSpelling = (precision: Precision): Readonly<Record<OperatorName, S
     greaterEqualCount: infix(">="),
     equalCount: infix("=="),
     notEqualCount: infix("!="),
-    and: infix("&&"),
-    or: infix("||"),
+    and: chained("&&"),
+    or: chained("||"),
     not: prefix("!"),
     equalFlag: infix("=="),
     notEqualFlag: infix("!="),

@@ -6,6 +6,8 @@ import type { FunctionDefinition, ParameterType } from "../ir/program.ts";
 export interface Printed {
   readonly text: string;
   readonly atomic: boolean;
+  /** The sign that a chain of equal logical operators was made with. */
+  readonly chain?: string;
 }
 
 export type Spelling = (operands: readonly Printed[]) => Printed;
@@ -39,6 +41,15 @@ export const operand = ({ text, atomic }: Printed): string => (atomic ? text : `
 export const infix =
   (sign: string): Spelling =>
   ([a, b]) => ({ text: `${operand(a)} ${sign} ${operand(b)}`, atomic: false });
+
+/** `a && b && c` needs no inner parentheses: the order of logical operators changes no value. */
+export const chained =
+  (sign: string): Spelling =>
+  ([a, b]) => ({
+    text: `${a.chain === sign ? a.text : operand(a)} ${sign} ${operand(b)}`,
+    atomic: false,
+    chain: sign,
+  });
 
 export const prefix =
   (sign: string): Spelling =>

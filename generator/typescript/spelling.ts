@@ -1,6 +1,15 @@
 import type { OperatorName } from "../ir/operators.ts";
 import type { Precision } from "../lowered.ts";
-import { atom, called, infix, type Printed, prefix, type Spelling, selection } from "../print/dialect.ts";
+import {
+  atom,
+  called,
+  chained,
+  infix,
+  type Printed,
+  prefix,
+  type Spelling,
+  selection,
+} from "../print/dialect.ts";
 
 /** One rounding per operation; `f` is Math.fround, so nothing is needed at float64. */
 const rounded =
@@ -41,8 +50,8 @@ export const typescriptSpelling = (precision: Precision): Readonly<Record<Operat
   greaterEqualCount: infix(">="),
   equalCount: infix("==="),
   notEqualCount: infix("!=="),
-  and: infix("&&"),
-  or: infix("||"),
+  and: chained("&&"),
+  or: chained("||"),
   not: prefix("!"),
   equalFlag: infix("==="),
   notEqualFlag: infix("!=="),
