@@ -70,29 +70,32 @@ export function squareRoot(x: Rational): Rational {
 
 const bitLength = (n: bigint): number => (n === 0n ? 0 : n.toString(2).length);
 
-/** Smallest subnormal is 2^-1074: no double has a finer last bit. */
-const FINEST = 1074;
+/** No double has a bit finer than the smallest subnormal, 2^-1074. */
+const FINEST = -1074;
+const MANTISSA_BITS = 53;
+
+const scaled = (n: bigint, powerOfTwo: number): bigint => (powerOfTwo > 0 ? n << BigInt(powerOfTwo) : n);
+
+/** Largest e with 2^e <= top / bottom. */
+function binaryExponent(top: bigint, bottom: bigint): number {
+  const guess = bitLength(top) - bitLength(bottom);
+  return scaled(top, -guess) >= scaled(bottom, guess) ? guess : guess - 1;
+}
 
 /** The double nearest `x`, ties to even, subnormals included; overflows to an infinity. */
 export function nearestDouble(x: Rational): number {
   if (x.numerator === 0n) return 0;
   const top = magnitude(x.numerator);
-  const wanted = 64 - (bitLength(top) - bitLength(x.denominator));
-  const shift = Math.min(wanted, FINEST);
-  const scaledTop = shift > 0 ? top << BigInt(shift) : top;
-  const scaledBottom = shift < 0 ? x.denominator << BigInt(-shift) : x.denominator;
-  const quotient = scaledTop / scaledBottom;
-  const exact = quotient * scaledBottom === scaledTop;
-  const size = wanted > FINEST ? roundWhole(scaledTop, scaledBottom) : roundSticky(quotient, exact);
-  const value = scaleByPowerOfTwo(size, -shift);
-  return x.numerator < 0n ? -value : value;
+  const lastBit = Math.max(binaryExponent(top, x.denominator) - MANTISSA_BITS + 1, FINEST);
+  const size = scaleByPowerOfTwo(
+    roundedQuotient(scaled(top, -lastBit), scaled(x.denominator, lastBit)),
+    lastBit,
+  );
+  return x.numerator < 0n ? -size : size;
 }
 
-/** `Number` of a BigInt rounds to nearest, ties to even; the sticky bit stands for the remainder. */
-const roundSticky = (quotient: bigint, exact: boolean): number => Number(exact ? quotient : quotient | 1n);
-
-/** Near the subnormals the last bit of the quotient is the last bit of the double: round to it. */
-function roundWhole(top: bigint, bottom: bigint): number {
+/** Nearest whole number, ties to even; at most 2^53 here, so exact as a double. */
+function roundedQuotient(top: bigint, bottom: bigint): number {
   const quotient = top / bottom;
   const twice = (top - quotient * bottom) * 2n;
   const up = twice > bottom || (twice === bottom && (quotient & 1n) === 1n);

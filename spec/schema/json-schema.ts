@@ -10,6 +10,7 @@ function collectDefinitions(): Definitions & { readonly all: () => Schema } {
     refer(kind, path, make) {
       const name = names.get(kind) ?? path;
       if (!names.has(kind)) {
+        if (made.has(name)) throw new Error(`two kinds of the table would be called ${name} in the schema`);
         names.set(kind, name);
         made.set(name, make());
       }

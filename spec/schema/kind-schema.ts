@@ -181,12 +181,12 @@ export function kindSchema(kind: Kind, path: string, definitions: Definitions): 
     case "block":
       return definitions.refer(kind, path, () => blockSchema(kind.keys, path, definitions, kind.oneOf));
     case "list":
-      return { type: "array", items: kindSchema(kind.of, path, definitions) };
+      return { type: "array", items: kindSchema(kind.of, `${path}_item`, definitions) };
     case "map":
       return {
         type: "object",
         propertyNames: { pattern: "^[a-z][a-z0-9_]{0,39}$" },
-        additionalProperties: kindSchema(kind.of, path, definitions),
+        additionalProperties: kindSchema(kind.of, `${path}_entry`, definitions),
       };
     case "variants":
       return definitions.refer(kind, path, () => variantsSchema(kind, path, definitions));

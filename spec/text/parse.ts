@@ -4,7 +4,6 @@ import {
   CST,
   type Document,
   isAlias,
-  isCollection,
   isMap,
   isScalar,
   isSeq,
@@ -162,7 +161,7 @@ function convert(work: Work, node: YamlNode, open: Open): Node {
   const [start, end] = (node.range ?? [0, 0, 0]) as Range;
   const at = work.positions.span(start, Math.max(end, start));
   if (isAlias(node)) return convertAlias(work, node, at, open);
-  if (work.unread.has(start) && (isScalar(node) || isFlow(node))) return { kind: "unread", at };
+  if (work.unread.has(start) && isScalar(node)) return { kind: "unread", at };
   if (open.aliased) work.budget.aliasNodes += 1;
   const inside = { ...open, nodes: [...open.nodes, node] };
   if (isMap(node)) return { kind: "map", entries: convertEntries(work, node.items, inside), at };
@@ -173,8 +172,6 @@ function convert(work: Work, node: YamlNode, open: Open): Node {
   const text = typeof node.value === "string" ? node.value : (node.source ?? "");
   return { kind: "scalar", text, quoted, at };
 }
-
-const isFlow = (node: YamlNode): boolean => isCollection(node) && node.flow === true;
 
 function convertAlias(work: Work, alias: Alias, at: Span, open: Open): Node {
   const target = alias.resolve(work.document);
