@@ -44,7 +44,7 @@ export const OVERFLOW = `(() => ({
 
 /** Boxes that scroll but that a keyboard cannot reach, or that have no name. */
 export const UNREACHABLE_BOXES = `Array.from(document.querySelectorAll(".box"))
-  .filter((box) => box.tabIndex !== 0 || box.getAttribute("role") !== "region" || !box.getAttribute("aria-label"))
+  .filter((box) => box.tabIndex !== 0 || box.getAttribute("role") !== "group" || !box.getAttribute("aria-label"))
   .length`;
 
 /** Labels of charts that stand outside their picture. */

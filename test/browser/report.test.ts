@@ -2,6 +2,7 @@ import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { pathToFileURL } from "node:url";
+import axe, { type AxeResults } from "axe-core";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { renderReport, renderTraceSvg } from "../../verification/report/index.ts";
 import { cannotUse } from "../support/tool.ts";
@@ -127,6 +128,22 @@ describe.skipIf(cannotUse("chromium"))("the report in a browser", () => {
     await page.close();
   });
 
+  test.each(SCHEMES)(
+    "in %s an independent checker of accessibility finds nothing (axe-core)",
+    async (colorScheme) => {
+      const { page } = await open(reports.usual, 1280, { colorScheme });
+      await page.evaluate(axe.source);
+      const { violations, passes } = (await page.evaluate("axe.run()")) as AxeResults;
+      expect(
+        violations.map(
+          ({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html.slice(0, 120)).join(" | ")}`,
+        ),
+      ).toEqual([]);
+      expect(passes.length).toBeGreaterThan(20);
+      await page.close();
+    },
+  );
+
   test("no label of a chart is cut off", async () => {
     const { page } = await open(reports.usual, 1280);
     expect(await page.evaluate(CLIPPED_LABELS)).toEqual([]);
@@ -147,7 +164,7 @@ describe.skipIf(cannotUse("chromium"))("the report in a browser", () => {
   test("with script the time axes of a run zoom together and the cursor reads the values", async () => {
     const { page, complaints } = await open(reports.usual, 1280);
     const figure = page.locator("#trace-1-figure");
-    const labels = () => figure.locator('g[aria-label="x-axis tick label"] text').allTextContents();
+    const labels = () => figure.locator('g[data-part="x-axis tick label"] text').allTextContents();
     const whole = await labels();
     expect(whole.at(-1)).toBe("4.0");
     await figure.getByRole("button", { name: "zoom in" }).click();

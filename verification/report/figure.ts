@@ -22,7 +22,7 @@ function row([first, ...rest]: readonly HtmlPart[]): Html {
  */
 export function tableBox(table: ValueTable, className: string): Html {
   return html`<p class="caption" aria-hidden="true">${table.caption}</p>
-<div class="box" role="region" tabindex="0" aria-label="${table.caption}">
+<div class="box" role="group" tabindex="0" aria-label="${table.caption}">
 <table class="${className}"><caption>${table.caption}</caption>
 <thead><tr>${table.head.map(
     (words) => html`<th scope="col">${words}</th>
@@ -34,7 +34,7 @@ export function tableBox(table: ValueTable, className: string): Html {
 /** A picture with its caption and the same values as a table. */
 export function figureBox(picture: Picture, caption: HtmlPart, table: ValueTable): Html {
   return html`<figure id="${picture.id}-figure">
-<div class="box" role="region" tabindex="0" aria-label="${picture.title}">${trusted(pictureMarkup(picture))}</div>
+<div class="box" role="group" tabindex="0" aria-label="${picture.title}">${trusted(pictureMarkup(picture))}</div>
 <figcaption>${caption}</figcaption>
 <details><summary>Values as a table</summary>${tableBox(table, "values")}</details>
 </figure>`;

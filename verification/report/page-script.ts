@@ -108,7 +108,7 @@ function place(node, x) {
 }
 
 function drawTicks(view, chart, whole) {
-  for (const group of chart.querySelectorAll('g[aria-label^="x-grid"], g[aria-label^="x-axis tick"]')) {
+  for (const group of chart.querySelectorAll('g[data-part^="x-grid"], g[data-part^="x-axis tick"]')) {
     group.original = group.original || Array.from(group.children);
     if (whole || group.original.length === 0) { group.replaceChildren(...group.original); continue; }
     group.replaceChildren(...ticks(view).map(({ time, places }) => {

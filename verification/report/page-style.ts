@@ -99,7 +99,10 @@ a{color:inherit;text-decoration:none}
 .box{overflow:visible}
 table{font-size:8pt;width:100%}
 th,td{padding:.15rem .3rem}
+table.requirements{font-size:7.2pt}
 table.requirements th[scope=row]{min-width:0}
+table.requirements .verdict{white-space:normal;padding:0 .2rem}
+table.requirements th,table.requirements td{padding:.15rem .2rem}
 td,caption,table.requirements td.words{white-space:normal}
 .hash{font-size:.7em;word-break:break-all}
 figure,tr,.cautions,.headline{break-inside:avoid}

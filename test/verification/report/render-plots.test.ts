@@ -51,7 +51,7 @@ describe("a run as charts", () => {
     });
     const svg = read(renderTraceSvg(plot));
     expect(texts(svg, "svg svg")).toHaveLength(1);
-    expect(texts(svg, 'svg svg:last-child [aria-label="x-axis label"]')).toEqual(["time, s"]);
+    expect(texts(svg, 'svg svg:last-child [data-part="x-axis label"]')).toEqual(["time, s"]);
     expect(texts(svg, "svg svg text").filter((words) => words === "target followed")).toEqual([]);
   });
 
@@ -79,7 +79,7 @@ describe("a run as charts", () => {
   test("each mode that occurs has a row with a bar for each stretch", () => {
     const mode = [0, 0, 2, 2, 2, 4, 2, 9];
     const svg = read(renderTraceSvg(tracePlot({ mode, length: 8, signals: {} })));
-    expect(texts(svg, '[aria-label="y-axis tick label"] text')).toEqual([
+    expect(texts(svg, '[data-part="y-axis tick label"] text')).toEqual([
       "start",
       "closed loop",
       "fail safe",

@@ -87,6 +87,8 @@ function speedLabels(map: CompressorMap, frame: Frame): Markish {
     dy: -5,
     textAnchor: "start",
     fill: colour("soft"),
+    stroke: colour("paper"),
+    strokeWidth: 4,
   });
 }
 

@@ -23,11 +23,16 @@ function renumber(value: string, ids: Map<string, string>, prefix: string): stri
   });
 }
 
-/** Serialised text holds no bare `<` or `>`, so that only tags are touched. */
+/**
+ * The library names the parts of a chart by `aria-label`, which is not allowed on a plain group; the picture as a whole
+ * has its title, and the names stay as data for the script. Serialised text holds no bare `<` or `>`, so that only
+ * tags are touched.
+ */
 function tidy(markup: string, prefix: string): string {
   const ids = new Map<string, string>();
   const tidyAttribute = (whole: string, name: string, value: string): string => {
-    if (name === "aria-label" || name.startsWith("data-")) return whole;
+    if (name === "aria-label") return `data-part="${value}"`;
+    if (name.startsWith("data-")) return whole;
     return `${name}="${renumber(roundDecimals(value), ids, prefix)}"`;
   };
   return markup.replace(/<[^>]*>/g, (tag) => tag.replace(/([\w-]+)="([^"]*)"/g, tidyAttribute));

@@ -29,6 +29,7 @@ function row({ result, index }: Placed, specFile: string): Html {
 <td>${whole(result.violations)}</td>
 <td>${bound(result)}</td>
 <td>${whole(corners.violations)} of ${whole(corners.exercised)}</td>
+<td>${worstMargin(corners.worst)}</td>
 <td class="words">${at.file === specFile ? undefined : name(`${at.file}:`)}${whole(at.line)}</td>
 </tr>`;
 }
@@ -38,10 +39,11 @@ const HEAD = [
   "verdict",
   "kind",
   "worst margin",
-  "random runs exercised",
+  "random runs judged",
   "violations",
   "chance of a violation below (95 %)",
   "corner violations",
+  "worst corner margin",
   "line",
 ];
 
@@ -54,7 +56,7 @@ function overview(evidence: Evidence): Html | undefined {
   );
   if (picture === undefined) return undefined;
   return html`<figure id="margins-figure">
-<div class="box" role="region" tabindex="0" aria-label="${picture.title}">${trusted(pictureMarkup(picture))}</div>
+<div class="box" role="group" tabindex="0" aria-label="${picture.title}">${trusted(pictureMarkup(picture))}</div>
 <figcaption>Margins of the random runs. Bar: 5th to 95th percentile; upright line: median; diamond: the worst random
 run; cross: the worst corner run. Left of the broken line: violated. Margins above 1.5 stand at the right end. The
 table of requirements above and the details below give the same values.</figcaption>
@@ -68,7 +70,7 @@ export function requirementTable(evidence: Evidence): Html {
 <h2 id="requirements-title">Requirements</h2>
 <p>A margin of 1 is comfortable by the whole allowance, 0 is the edge, negative is a violation. Margins are rounded
 down, bounds up. Lines are those of ${code(evidence.controller.specFile)}.</p>
-<div class="box" role="region" tabindex="0" aria-label="Table of requirements">
+<div class="box" role="group" tabindex="0" aria-label="Table of requirements">
 <table class="requirements"><caption>Requirements, their verdicts and their margins</caption>
 <thead><tr>${HEAD.map((words) => html`<th scope="col" class="${WORDS.has(words) ? "words" : "figures"}">${words}</th>`)}</tr></thead>
 <tbody>${rows.length === 0 ? html`<tr><td colspan="${HEAD.length}">no requirement</td></tr>` : rows}</tbody></table></div>
