@@ -29,7 +29,7 @@ export function controllerFacts(loop: LoopSpec, form: ControllerFacts["form"]): 
   };
 }
 
-function limitsOf({ target, overspeedGuard }: ControllerSpec): Limits {
+export function limitsOf({ target, overspeedGuard }: ControllerSpec): Limits {
   const boostCeilingKpa = target.ceiling.value;
   if (overspeedGuard === undefined) return { boostCeilingKpa };
   const { limit, margin, proportional, trip } = overspeedGuard;

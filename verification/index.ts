@@ -1,4 +1,5 @@
 // The door of verification: a checked loop in, evidence, counterexamples and tuned tables out. Disk only in worker files.
+export { limitsOf } from "./build-evidence.ts";
 export { type Batch, type BatchResult, type Progress, type RunBatch, runCampaign } from "./campaign.ts";
 export {
   type CompiledController,
