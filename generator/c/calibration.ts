@@ -10,7 +10,7 @@ import { hexFloat, shortestDecimal } from "../print/numbers.ts";
 import { banner } from "./text.ts";
 
 const STEP = "    ";
-const PER_LINE = 6;
+const PER_LINE = 4;
 
 const sourceText = ({ at }: CalibrationInfo): string => {
   const name = at?.file.split("/").pop();

@@ -2,13 +2,13 @@ import type { Precision } from "../lowered.ts";
 
 /** Shortest decimal that gives the value back in its precision: 0.1 for the float nearest to 0.1. */
 export const shortestDecimal = (value: number, precision: Precision): string => {
-  if (precision === "float64") {
-    return String(value);
+  if (Object.is(value, -0) || precision === "float64") {
+    return Object.is(value, -0) ? "-0" : String(value);
   }
   for (let digits = 1; digits < 9; digits++) {
     const text = value.toPrecision(digits);
     if (Object.is(Math.fround(Number(text)), value)) {
-      return String(Number(text)) === "0" && Object.is(value, -0) ? "-0" : String(Number(text));
+      return String(Number(text));
     }
   }
   return String(Number(value.toPrecision(9)));
