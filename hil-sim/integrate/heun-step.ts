@@ -46,15 +46,16 @@ export function heunMillisecond(
   const { rates, predicted, predictedRates, flows, counts } = memory;
   for (let i = 0; i < memory.stepsPerMillisecond; i++) {
     derivatives(parameters, state, input, faults, flows, rates);
-    predict(state, rates, memory.step, predicted);
+    predict(state, memory);
     derivatives(parameters, predicted, input, faults, flows, predictedRates);
-    correct(state, rates, predictedRates, 0.5 * memory.step);
+    correct(state, memory);
     limitState(state, counts);
   }
 }
 
-/** into = from + step · rates. */
-function predict(from: PlantState, rates: PlantState, step: number, into: PlantState): void {
+/** predicted = state + step · rates. */
+function predict(from: PlantState, memory: HeunMemory): void {
+  const { step, rates, predicted: into } = memory;
   into.boostPressure = from.boostPressure + step * rates.boostPressure;
   into.intakePressure = from.intakePressure + step * rates.intakePressure;
   into.exhaustPressure = from.exhaustPressure + step * rates.exhaustPressure;
@@ -71,8 +72,10 @@ function predict(from: PlantState, rates: PlantState, step: number, into: PlantS
   into.engineSpeed = from.engineSpeed + step * rates.engineSpeed;
 }
 
-/** state = state + half · (first + second). */
-function correct(state: PlantState, first: PlantState, second: PlantState, half: number): void {
+/** state = state + step/2 · (rates + predictedRates). */
+function correct(state: PlantState, memory: HeunMemory): void {
+  const { rates: first, predictedRates: second } = memory;
+  const half = 0.5 * memory.step;
   state.boostPressure += half * (first.boostPressure + second.boostPressure);
   state.intakePressure += half * (first.intakePressure + second.intakePressure);
   state.exhaustPressure += half * (first.exhaustPressure + second.exhaustPressure);

@@ -13,22 +13,68 @@ export function newStepCounts(): StepCounts {
   return { clamps: 0, notANumber: 0 };
 }
 
-/** Limits every state in place; NaN becomes the lower bound. */
+/** Limits every state in place; NaN becomes the lower bound. The gate's end stops belong to the plant and are not counted. */
 export function limitState(state: PlantState, counts: StepCounts): void {
-  state.boostPressure = limited(state.boostPressure, 2e3, 8e5, counts);
-  state.intakePressure = limited(state.intakePressure, 2e3, 8e5, counts);
-  state.exhaustPressure = limited(state.exhaustPressure, 2e3, 15e5, counts);
-  state.outletPressure = limited(state.outletPressure, 2e3, 10e5, counts);
-  state.turboSpeed = limited(state.turboSpeed, 0, 4e4, counts);
-  state.compressorFlow = limited(state.compressorFlow, -2, 3, counts);
-  state.boostTemperature = limited(state.boostTemperature, 200, 800, counts);
-  state.inletTemperature = limited(state.inletTemperature, 200, 800, counts);
-  state.exhaustTemperature = limited(state.exhaustTemperature, 200, 1800, counts);
-  state.wallTemperature = limited(state.wallTemperature, 200, 1800, counts);
-  state.wastegateOpening = limited(endStopped(state.wastegateOpening), 0, 1, counts);
-  state.bypassOpening = limited(state.bypassOpening, 0, 1, counts);
-  state.throttleOpening = limited(state.throttleOpening, 0, 1, counts);
-  state.engineSpeed = limited(state.engineSpeed, 0, 2000, counts);
+  if (state.wastegateOpening < 0) state.wastegateOpening = 0;
+  if (state.wastegateOpening > 1) state.wastegateOpening = 1;
+  if (gasInBounds(state) && motionInBounds(state)) return;
+  for (const [name, low, high] of BOUNDS) state[name] = limited(state[name], low, high, counts);
+}
+
+const BOUNDS: readonly (readonly [keyof PlantState, number, number])[] = [
+  ["boostPressure", 2e3, 8e5],
+  ["intakePressure", 2e3, 8e5],
+  ["exhaustPressure", 2e3, 15e5],
+  ["outletPressure", 2e3, 10e5],
+  ["turboSpeed", 0, 4e4],
+  ["compressorFlow", -2, 3],
+  ["boostTemperature", 200, 800],
+  ["inletTemperature", 200, 800],
+  ["exhaustTemperature", 200, 1800],
+  ["wallTemperature", 200, 1800],
+  ["wastegateOpening", 0, 1],
+  ["bypassOpening", 0, 1],
+  ["throttleOpening", 0, 1],
+  ["engineSpeed", 0, 2000],
+];
+
+/** The usual case of `BOUNDS`, without a call per state: it runs every step. False for NaN. */
+function gasInBounds(state: PlantState): boolean {
+  return (
+    state.boostPressure >= 2e3 &&
+    state.boostPressure <= 8e5 &&
+    state.intakePressure >= 2e3 &&
+    state.intakePressure <= 8e5 &&
+    state.exhaustPressure >= 2e3 &&
+    state.exhaustPressure <= 15e5 &&
+    state.outletPressure >= 2e3 &&
+    state.outletPressure <= 10e5 &&
+    state.boostTemperature >= 200 &&
+    state.boostTemperature <= 800 &&
+    state.inletTemperature >= 200 &&
+    state.inletTemperature <= 800 &&
+    state.exhaustTemperature >= 200 &&
+    state.exhaustTemperature <= 1800 &&
+    state.wallTemperature >= 200 &&
+    state.wallTemperature <= 1800
+  );
+}
+
+function motionInBounds(state: PlantState): boolean {
+  return (
+    state.turboSpeed >= 0 &&
+    state.turboSpeed <= 4e4 &&
+    state.compressorFlow >= -2 &&
+    state.compressorFlow <= 3 &&
+    state.wastegateOpening >= 0 &&
+    state.wastegateOpening <= 1 &&
+    state.bypassOpening >= 0 &&
+    state.bypassOpening <= 1 &&
+    state.throttleOpening >= 0 &&
+    state.throttleOpening <= 1 &&
+    state.engineSpeed >= 0 &&
+    state.engineSpeed <= 2000
+  );
 }
 
 function limited(value: number, low: number, high: number, counts: StepCounts): number {
@@ -37,9 +83,4 @@ function limited(value: number, low: number, high: number, counts: StepCounts): 
   if (value > high) return high;
   if (!(value < low)) counts.notANumber += 1;
   return low;
-}
-
-/** The gate's mechanical stops are part of the plant, not a correction; NaN passes. */
-function endStopped(opening: number): number {
-  return opening < 0 ? 0 : Math.min(opening, 1);
 }

@@ -1,6 +1,5 @@
 import { newPlantFaults, newPlantInput, type PlantFaults, type PlantInput } from "../plant/plant-input.ts";
-import type { PlantState } from "../plant/plant-state.ts";
-import { newPlantState } from "../plant/plant-state.ts";
+import { newPlantState, type PlantState } from "../plant/plant-state.ts";
 
 /** Where an equilibrium is sought. */
 export interface OperatingPoint {
@@ -19,17 +18,16 @@ export interface OperatingPoint {
 }
 
 export function inputAt(point: OperatingPoint, opening: number): PlantInput {
-  return {
-    ...newPlantInput(),
-    throttleCommand: point.throttle,
-    wastegateCommand: opening,
-    bypassCommand: point.bypass,
-    fuel: point.fuel,
-    ambientPressure: point.ambientPressure,
-    ambientTemperature: point.ambientTemperature,
-    freeVehicle: 0,
-    engineAcceleration: 0,
-  };
+  const input = newPlantInput();
+  input.throttleCommand = point.throttle;
+  input.wastegateCommand = opening;
+  input.bypassCommand = point.bypass;
+  input.fuel = point.fuel;
+  input.ambientPressure = point.ambientPressure;
+  input.ambientTemperature = point.ambientTemperature;
+  input.freeVehicle = 0;
+  input.engineAcceleration = 0;
+  return input;
 }
 
 export function faultsAt(point: OperatingPoint): PlantFaults {
@@ -39,21 +37,20 @@ export function faultsAt(point: OperatingPoint): PlantFaults {
 /** A warm engine with an idling turbo: where the search starts, so that it finds what a run from low boost would reach. */
 export function idlingTurbo(point: OperatingPoint, opening: number): PlantState {
   const ambient = point.ambientPressure;
-  return {
-    ...newPlantState(),
-    boostPressure: 1.02 * ambient,
-    intakePressure: (0.5 + 0.45 * point.throttle) * ambient,
-    exhaustPressure: 1.06 * ambient,
-    outletPressure: 1.01 * ambient,
-    turboSpeed: 4000,
-    compressorFlow: 0.05,
-    boostTemperature: point.ambientTemperature + 8,
-    inletTemperature: point.ambientTemperature,
-    exhaustTemperature: 1050,
-    wallTemperature: 850,
-    wastegateOpening: opening,
-    bypassOpening: point.bypass,
-    throttleOpening: point.throttle,
-    engineSpeed: point.engineSpeed,
-  };
+  const state = newPlantState();
+  state.boostPressure = 1.02 * ambient;
+  state.intakePressure = (0.5 + 0.45 * point.throttle) * ambient;
+  state.exhaustPressure = 1.06 * ambient;
+  state.outletPressure = 1.01 * ambient;
+  state.turboSpeed = 4000;
+  state.compressorFlow = 0.05;
+  state.boostTemperature = point.ambientTemperature + 8;
+  state.inletTemperature = point.ambientTemperature;
+  state.exhaustTemperature = 1050;
+  state.wallTemperature = 850;
+  state.wastegateOpening = opening;
+  state.bypassOpening = point.bypass;
+  state.throttleOpening = point.throttle;
+  state.engineSpeed = point.engineSpeed;
+  return state;
 }
