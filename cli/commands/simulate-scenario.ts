@@ -1,0 +1,120 @@
+import { parse } from "yaml";
+import { type LoopSpec, readLoopSpec, type ScenarioSpec } from "../../spec/index.ts";
+import {
+  type Draw,
+  drawCorner,
+  drawRun,
+  type JudgedRun,
+  loadController,
+  requirementsOf,
+  scatterNames,
+  scenarioRunner,
+  setInSpec,
+} from "../../verification/index.ts";
+import { CommandFailure } from "../command-failure.ts";
+import { generatedController } from "../controller.ts";
+import { EXIT, type ExitCode } from "../exit-codes.ts";
+import { writeFileWhole } from "../files/write-file.ts";
+import { jsonText, mention, refuse } from "../findings.ts";
+import type { Loaded } from "../load-loop.ts";
+import { loadSource, neighboursOf } from "../load-source.ts";
+import { requirePlotKind, writePlot } from "../plot-file.ts";
+import { requireScenario } from "../require-tests.ts";
+import type { Session } from "../session.ts";
+import { CSV_SIGNALS, traceCsv } from "../trace-csv.ts";
+
+export interface ScenarioRunOptions {
+  readonly scenario: string;
+  /** `path=value`, value as in the spec. */
+  readonly set: readonly string[];
+  readonly seed: number;
+  /** Index of a random run; absent: the middle of every range on the nominal plant. */
+  readonly run?: number;
+  readonly csv?: string;
+  readonly plot?: string;
+}
+
+function applySetting(text: string, setting: string): string {
+  const at = setting.indexOf("=");
+  if (at < 1) throw new CommandFailure(`--set needs path=value, got ${JSON.stringify(setting)}`);
+  try {
+    return setInSpec(text, setting.slice(0, at).trim(), parse(setting.slice(at + 1)));
+  } catch (error) {
+    throw new CommandFailure(`--set ${setting}: ${error instanceof Error ? error.message : String(error)}`);
+  }
+}
+
+/** The spec as it reads with the settings written into its text; findings point into that text. */
+function loadWithSettings(path: string, settings: readonly string[]): Loaded<LoopSpec> {
+  const { source, diagnostics } = loadSource(path);
+  if (source === undefined) return { diagnostics, sources: [] };
+  const changed = { ...source, text: settings.reduce(applySetting, source.text) };
+  const neighbours = neighboursOf(path);
+  const { spec, diagnostics: found } = readLoopSpec(changed, neighbours.open);
+  return {
+    ...(spec === undefined ? {} : { value: spec }),
+    diagnostics: [...found, ...neighbours.diagnostics],
+    sources: [changed, ...neighbours.sources],
+  };
+}
+
+/** The middle of every range is the first corner run. */
+function drawFor(scenario: ScenarioSpec, { run, seed }: ScenarioRunOptions): Draw {
+  const scatter = scatterNames(scenario.plantScatter).length;
+  return run === undefined ? drawCorner(scenario, scatter, seed, 0) : drawRun(scenario, scatter, seed, run);
+}
+
+const marginWords = (margin: number | undefined): string => {
+  if (margin === undefined) return "not exercised";
+  return `${margin < 0 ? "violated" : "holds"}, margin ${margin.toFixed(3)}`;
+};
+
+/** `simulate SPEC --scenario NAME`: one closed-loop run with the generated controller. */
+export async function simulateScenario(
+  specPath: string,
+  options: ScenarioRunOptions,
+  session: Session,
+): Promise<ExitCode> {
+  requirePlotKind(options.plot);
+  const loaded = loadWithSettings(specPath, options.set);
+  if (loaded.value === undefined) return refuse(loaded, session, "nothing was simulated");
+  mention(loaded, session);
+  const loop = loaded.value;
+  const scenario = requireScenario(loop, options.scenario);
+  const port = await loadController(generatedController(loop), loop);
+  const result = scenarioRunner(loop, scenario, port, CSV_SIGNALS)(drawFor(scenario, options));
+  if (options.csv !== undefined) writeFileWhole(options.csv, traceCsv(result.trace));
+  if (options.plot !== undefined)
+    await writePlot(options.plot, `${loop.controller.name}: ${scenario.name}`, result.trace, loop);
+  report(loop, scenario, options, result, session);
+  return EXIT.fine;
+}
+
+function report(
+  loop: LoopSpec,
+  scenario: ScenarioSpec,
+  options: ScenarioRunOptions,
+  result: JudgedRun,
+  session: Session,
+): void {
+  const margins = requirementsOf(loop, scenario).map(({ id }, i) => ({ id, margin: result.margins[i] }));
+  if (session.json) {
+    const { leftValidity: left_validity, clamped } = result;
+    const written = { csv: options.csv ?? null, plot: options.plot ?? null };
+    const rows = margins.map(({ id, margin }) => ({ id, margin: margin ?? null }));
+    session.result(
+      jsonText({ ok: true, scenario: scenario.name, margins: rows, left_validity, clamped, ...written }),
+    );
+    return;
+  }
+  const which =
+    options.run === undefined
+      ? "middle of every range, nominal plant"
+      : `run ${options.run}, seed ${options.seed}`;
+  session.note(`${scenario.name}: ${which}`);
+  for (const { id, margin } of margins) session.note(`  ${id.padEnd(24)} ${marginWords(margin)}`);
+  if (result.leftValidity)
+    session.complain("the run left the range in which the plant file calls itself valid");
+  if (result.clamped) session.complain("a state was held at its bound; do not rely on this run");
+  for (const path of [options.csv, options.plot]) if (path !== undefined) session.note(`wrote ${path}`);
+}
