@@ -100,10 +100,11 @@ a{color:inherit;text-decoration:none}
 table{font-size:8pt;width:100%}
 th,td{padding:.15rem .3rem}
 table.requirements{font-size:7.2pt}
-table.requirements th[scope=row]{min-width:0}
-table.requirements .verdict{white-space:normal;padding:0 .2rem}
+table.requirements th[scope=row]{min-width:0;width:36%}
+table.requirements .verdict{padding:0 .15rem}
+#details article{break-inside:avoid}
 table.requirements th,table.requirements td{padding:.15rem .2rem}
-td,caption,table.requirements td.words{white-space:normal}
+td,caption{white-space:normal}
 .hash{font-size:.7em;word-break:break-all}
 figure,tr,.cautions,.headline{break-inside:avoid}
 h2,h3,.caption{break-after:avoid}
