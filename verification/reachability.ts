@@ -29,7 +29,8 @@ export interface Reach {
 
 /**
  * The reach of each command of a run, on that run's plant, at the engine speed and accelerator at the end of the
- * command's window. `leastBoost`: kPa above ambient below which a target asks for no boost.
+ * command's window. The hold that opens a trace is asked about only where no command follows. `leastBoost`: kPa above
+ * ambient below which a target asks for no boost.
  */
 export function reachOfCommands(
   parameters: PlantParameters,
@@ -38,26 +39,32 @@ export function reachOfCommands(
   commands: readonly Command[],
   leastBoost: number,
 ): Reach[] {
-  const ambient = standardPressure(scenario.ambient.altitude);
-  const ranges = new Map<string, ReachableBoost>();
+  const noBoost = standardPressure(scenario.ambient.altitude) / 1000 + leastBoost;
+  const holds = holdsAt(parameters, scenario, trace);
+  return commands.map((command, index) => {
+    if (index === 0 && commands.length > 1) return { holds: false, withRoom: false };
+    const before = commands[index - 1];
+    const fits = holds(command, 1);
+    const startsWell = before === undefined || before.to < noBoost || holds(before, 1);
+    const withRoom = fits && startsWell && holds(command, 1 - ROOM) && holds(command, 1 + ROOM);
+    return { holds: fits, withRoom };
+  });
+}
+
+/** Whether the plant holds a command's wanted boost times a ratio; the range of each operating point is solved once. */
+function holdsAt(parameters: PlantParameters, scenario: DrawnScenario, trace: Trace) {
   const wanted = recorded(trace, "boost_wanted");
-  const holds = (command: Command, ratio: number): boolean => {
-    const point = pointAt(scenario, trace, command.until - 1);
-    const boost = wanted[command.until - 1] * ratio * 1000;
+  const ranges = new Map<string, ReachableBoost>();
+  return (command: Command, ratio: number): boolean => {
+    const last = command.until - 1;
+    const point = pointAt(scenario, trace, last);
+    const boost = wanted[last] * ratio * 1000;
     const key = `${point.engineSpeed} ${point.throttle}`;
     const range = ranges.get(key) ?? reachableBoost(parameters, point);
     ranges.set(key, range);
     if (range.converged) return boost > range.lowest && boost < range.highest;
     return openingForBoost(parameters, point, boost).kind === "held";
   };
-  const fits = commands.map((command) => holds(command, 1));
-  return commands.map((command, index) => {
-    const before = commands[index - 1];
-    const startsWell =
-      before === undefined || fits[index - 1] || before.to * 1000 < ambient + leastBoost * 1000;
-    const room = fits[index] && holds(command, 1 - ROOM) && holds(command, 1 + ROOM);
-    return { holds: fits[index], withRoom: room && startsWell };
-  });
 }
 
 function pointAt(scenario: DrawnScenario, trace: Trace, sample: number): OperatingPoint {

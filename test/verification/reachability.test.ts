@@ -25,8 +25,14 @@ function reachOf(rpm: number, targetsKpa: readonly number[]) {
 //   5000 rpm: closed 3.95, open 1.16;  7000 rpm: closed 3.55, open 1.412
 describe("what a plant can hold", () => {
   it("lies between the steady boost of the open and of the closed gate", () => {
-    expect(reachOf(5000, [200, 392, 200, 398]).map(({ holds }) => holds)).toEqual([true, true, true, false]);
-    expect(reachOf(7000, [200, 143, 200, 139]).map(({ holds }) => holds)).toEqual([true, true, true, false]);
+    expect(reachOf(5000, [200, 392, 200, 398]).map(({ holds }) => holds)).toEqual([false, true, true, false]);
+    expect(reachOf(7000, [200, 143, 200, 139]).map(({ holds }) => holds)).toEqual([false, true, true, false]);
+  });
+
+  it("is asked of the hold that opens a trace only where no command follows", () => {
+    expect(reachOf(5000, [200])).toEqual([{ holds: true, withRoom: true }]);
+    expect(reachOf(7000, [139])).toEqual([{ holds: false, withRoom: false }]);
+    expect(reachOf(5000, [200, 240])[0]).toEqual({ holds: false, withRoom: false });
   });
 
   it("needs 2.5 % of room on either side to settle", () => {
