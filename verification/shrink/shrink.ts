@@ -17,6 +17,8 @@ export type MarginOf = (draw: Draw) => number | undefined;
 /** Steps per range, from round to fine: the first at which the rounded run still violates is used. */
 const DIVISIONS = [20, 200, 2000];
 const SCATTER_STEPS = 10;
+/** Simulations kept for shortening the run at the end. */
+const FOR_SHORTENING = 10;
 
 /**
  * The smallest manoeuvre found that still violates: nominal plant, no noise, no faults and round middle values where
@@ -25,22 +27,23 @@ const SCATTER_STEPS = 10;
  */
 export function shrink(scenario: ScenarioSpec, start: Draw, marginOf: MarginOf, budget: number): Shrunk {
   const search = new Map<string, number | undefined>();
-  const judge = (draw: Draw): number | undefined => {
+  const judge = (draw: Draw, most = budget): number | undefined => {
     const key = JSON.stringify(draw);
-    if (!search.has(key) && search.size < budget) search.set(key, marginOf(draw));
+    if (!search.has(key) && search.size < most) search.set(key, marginOf(draw));
     return search.get(key);
   };
   const violates = (draw: Draw): boolean => (judge(draw) ?? 0) < 0;
+  const violatesEarly = (draw: Draw): boolean => (judge(draw, budget - FOR_SHORTENING) ?? 0) < 0;
   if (!violates(start)) throw new Error("only a run that violates can be shrunk");
 
-  const plain = simplifications(start).find(violates) ?? start;
+  const plain = simplifications(start).find(violatesEarly) ?? start;
   const grids = DIVISIONS.map((divisions) =>
     freeValues(scenario).map(({ free }) => gridOver(free, divisions)),
   );
   const rounded = grids
     .map((each) => ({ grids: each, draw: roundedTo(each, plain) }))
-    .find(({ draw }) => violates(draw));
-  const small = rounded ? smallestOnGrid(rounded.grids, rounded.draw, violates) : plain;
+    .find(({ draw }) => violatesEarly(draw));
+  const small = rounded ? smallestOnGrid(rounded.grids, rounded.draw, violatesEarly) : plain;
   const draw = shortest(scenario, small, violates);
   return { draw, margin: judge(draw) ?? Number.NaN, simulations: search.size };
 }
