@@ -36,12 +36,21 @@ const missingEntries = (
       ),
     );
 
+const remembered = new WeakMap<ReadonlyMap<string, string>, ReturnType<typeof readRuntime>>();
+
+/** The runtime's text is parsed once per map: it is the same for every spec. */
+const parsed = (runtime: ReadonlyMap<string, string>): ReturnType<typeof readRuntime> => {
+  const known = remembered.get(runtime) ?? readRuntime(runtime);
+  remembered.set(runtime, known);
+  return known;
+};
+
 /**
  * The passes in their order: front (text to typed IR), specialise (the spec's structure fixed, the rest dropped),
  * validate, and the calibration's own check added. Pure; every refusal names a line of the runtime.
  */
 export const compileProgram = ({ runtime, lowered }: CompileInput): Compiled => {
-  const { module, refusals } = readRuntime(runtime, lowered);
+  const { module, refusals } = parsed(runtime);
   const early = [
     ...refusals,
     ...missingEntries(lowered, module.functions),

@@ -52,16 +52,10 @@ export interface AgreementSubject {
   readonly program: Program;
   readonly interpreter: ControllerModule;
   readonly typescript: ControllerModule;
-  readonly native: readonly { readonly build: NativeBuild; readonly path: string }[];
+  readonly builds: readonly NativeBuild[];
+  readonly folder: NativeFolder;
   readonly remove: () => Promise<void>;
 }
-
-const buildAll = async (folder: NativeFolder, program: Program, builds: readonly NativeBuild[]) => {
-  const sources = [`${program.name}.c`, `${program.name}_cal.c`, `${program.name}_record.c`];
-  return Promise.all(
-    builds.map(async (build) => ({ build, path: await buildNative(folder, sources, build) })),
-  );
-};
 
 type Files = ReadonlyMap<string, string>;
 
@@ -73,11 +67,17 @@ export const prepareAgreement = async (
 ): Promise<AgreementSubject> => {
   const files = new Map([...printC(program), [`${program.name}_record.c`, printHarness(program)]]);
   const folder = await writeSources(change(files));
+  await buildNative(
+    folder,
+    [`${program.name}.c`, `${program.name}_cal.c`, `${program.name}_record.c`],
+    builds,
+  );
   return {
     program,
     interpreter: interpretedModule(program),
     typescript: generatedModule(layoutOf(program), await loadTypeScript(printTypeScript(program))),
-    native: await buildAll(folder, program, builds),
+    builds,
+    folder,
     remove: folder.remove,
   };
 };
@@ -108,9 +108,7 @@ export const agree = async (
     ...(reference === "interpreter" ? [result("typescript", twin.words.bytes)] : []),
   ];
   const input = inputBytes(frames, calibration);
-  const native: TargetResult[] = [];
-  for (const { build, path } of subject.native) {
-    native.push(result(build.name, await runNative(path, input)));
-  }
+  const recorded = await runNative(subject.folder, subject.builds, input);
+  const native = [...recorded].map(([name, bytes]) => result(name, bytes));
   return [...inProcess, ...native];
 };

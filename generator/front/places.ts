@@ -12,8 +12,6 @@ export interface FoundPlace {
   readonly type: DeclaredType;
   /** Of the last field; absent for a bare parameter. */
   readonly field?: DeclaredField;
-  /** Key of the array's length: `Interface.field`, or `Interface.field.part`. */
-  readonly sizeKey?: string;
 }
 
 const partOf = (table: TableName, part: string, node: ts.Node): void => {
@@ -27,7 +25,7 @@ const partOf = (table: TableName, part: string, node: ts.Node): void => {
 };
 
 /** A part of a table is a field, or a parameter, of its own: its name joined with a dot. */
-const joinPart = ({ root, fields }: Place, part: string): Place =>
+export const joinPart = ({ root, fields }: Place, part: string): Place =>
   fields.length === 0
     ? { root: `${root}.${part}`, fields }
     : { root, fields: [...fields.slice(0, -1), `${fields[fields.length - 1]}.${part}`] };
@@ -36,13 +34,7 @@ const stepInto = (scope: Scope, outer: FoundPlace, node: ts.PropertyAccessExpres
   const name = node.name.text;
   if (outer.type.kind === "table") {
     partOf(outer.type.name, name, node.name);
-    const sizeKey = outer.sizeKey === undefined ? undefined : `${outer.sizeKey}.${name}`;
-    return {
-      ...outer,
-      place: joinPart(outer.place, name),
-      type: { kind: "array" },
-      ...(sizeKey ? { sizeKey } : {}),
-    };
+    return { ...outer, place: joinPart(outer.place, name), type: { kind: "array" } };
   }
   const declared =
     outer.type.kind === "struct" ? scope.declarations.interfaces.get(outer.type.name) : undefined;
@@ -58,7 +50,6 @@ const stepInto = (scope: Scope, outer: FoundPlace, node: ts.PropertyAccessExpres
     place: { root: outer.place.root, fields: [...outer.place.fields, name] },
     type: field.type,
     field,
-    sizeKey: `${declared.name}.${name}`,
   };
 };
 
@@ -80,7 +71,3 @@ export const findArray = (scope: Scope, node: ts.Expression): FoundPlace | undef
   const found = findPlace(scope, node);
   return found?.type.kind === "array" ? found : undefined;
 };
-
-/** Length of an array field, from the spec; 0 for an array that this spec has no use for. */
-export const sizeOf = (scope: Scope, found: FoundPlace): number | undefined =>
-  found.sizeKey === undefined ? undefined : (scope.arraySizes[found.sizeKey] ?? 0);

@@ -12,7 +12,7 @@ import { OPERATORS, type ValueKind } from "../ir/operators.ts";
 import { compiler } from "./compiler.ts";
 import { type DeclaredParameter, isValueType, type Signature, TABLE_PARTS } from "./declarations.ts";
 import { intrinsicOperator, isIntrinsic } from "./intrinsics.ts";
-import { type FoundPlace, findPlace, sizeOf } from "./places.ts";
+import { findPlace, joinPart } from "./places.ts";
 import { operation, readTyped } from "./read-expression.ts";
 import { shortened } from "./read-types.ts";
 import { Refused } from "./refusals.ts";
@@ -64,24 +64,6 @@ const wrong = (node: ts.Node, parameter: DeclaredParameter): never => {
   );
 };
 
-const arrayArgument = (scope: Scope, found: FoundPlace): Argument => {
-  const size = sizeOf(scope, found);
-  return { kind: "array", place: found.place, ...(size === undefined ? {} : { size }) };
-};
-
-const tablePart = ({ place, sizeKey, ...rest }: FoundPlace, part: string): FoundPlace => ({
-  ...rest,
-  type: { kind: "array" },
-  place:
-    place.fields.length === 0
-      ? { root: `${place.root}.${part}`, fields: [] }
-      : {
-          root: place.root,
-          fields: [...place.fields.slice(0, -1), `${place.fields[place.fields.length - 1]}.${part}`],
-        },
-  ...(sizeKey === undefined ? {} : { sizeKey: `${sizeKey}.${part}` }),
-});
-
 const readArgument = (
   scope: Scope,
   node: ts.Expression,
@@ -109,10 +91,10 @@ const readArgument = (
   if (type.kind === "table") {
     const fits = found.type.kind === "table" && found.type.name === type.name;
     return fits
-      ? TABLE_PARTS[type.name].map((part) => arrayArgument(scope, tablePart(found, part)))
+      ? TABLE_PARTS[type.name].map((part) => ({ kind: "array", place: joinPart(found.place, part) }))
       : wrong(node, parameter);
   }
-  return [arrayArgument(scope, found)];
+  return [{ kind: "array", place: found.place }];
 };
 
 const calledFunction = (scope: Scope, node: ts.CallExpression): Signature => {

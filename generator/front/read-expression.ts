@@ -3,7 +3,7 @@ import { COUNT, type Expression, FLAG, REAL, sameType, type ValueType } from "..
 import { OPERATORS, type OperatorName } from "../ir/operators.ts";
 import { compiler } from "./compiler.ts";
 import { isValueType } from "./declarations.ts";
-import { findArray, findPlace, sizeOf } from "./places.ts";
+import { findArray, findPlace } from "./places.ts";
 import { readCall } from "./read-call.ts";
 import { shortened } from "./read-types.ts";
 import { type RefusalCode, Refused } from "./refusals.ts";
@@ -235,10 +235,7 @@ const readProperty = (scope: Scope, node: ts.PropertyAccessExpression): Expressi
   }
   const array = node.name.text === "length" ? findArray(scope, node.expression) : undefined;
   if (array !== undefined) {
-    const size = sizeOf(scope, array);
-    return size === undefined
-      ? { kind: "length", place: array.place, type: COUNT, origin }
-      : { kind: "count", value: size, type: COUNT, origin };
+    return { kind: "length", place: array.place, type: COUNT, origin };
   }
   const found = findPlace(scope, node);
   if (found === undefined) {

@@ -61,7 +61,6 @@ const guarded = <T>(refusals: Refusal[], action: () => T): T | undefined => {
 export const readFunction = (
   signature: Signature,
   declarations: Declarations,
-  arraySizes: Readonly<Record<string, number>>,
   refusals: Refusal[],
 ): FunctionDefinition => {
   const scope: Scope = {
@@ -69,7 +68,6 @@ export const readFunction = (
     signature,
     parameters: new Map(signature.parameters.map(({ name, type }) => [name, type])),
     blocks: [new Map()],
-    arraySizes,
     refusals,
   };
   const statements = [...(signature.node.body?.statements ?? [])];

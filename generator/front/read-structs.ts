@@ -1,12 +1,6 @@
 import type { Field, FieldType, Struct } from "../ir/program.ts";
 import type { Lowered, StructRole } from "../lowered.ts";
-import {
-  type Declarations,
-  type DeclaredField,
-  type DeclaredInterface,
-  isValueType,
-  TABLE_PARTS,
-} from "./declarations.ts";
+import { type DeclaredField, type DeclaredInterface, isValueType, TABLE_PARTS } from "./declarations.ts";
 
 const fieldsOf = (owner: string, field: DeclaredField, sizes: Lowered["arraySizes"]): readonly Field[] => {
   const { name, type, doc, at } = field;
@@ -26,7 +20,10 @@ const fieldsOf = (owner: string, field: DeclaredField, sizes: Lowered["arraySize
 };
 
 /** Interfaces as structs with flat tables, inner ones first; those that no role reaches are left out. */
-export const readStructs = (declarations: Declarations, lowered: Lowered): readonly Struct[] => {
+export const readStructs = (
+  interfaces: ReadonlyMap<string, DeclaredInterface>,
+  lowered: Lowered,
+): readonly Struct[] => {
   const done = new Map<string, Struct>();
   const visit = (declared: DeclaredInterface | undefined, role: StructRole): void => {
     if (declared === undefined || done.has(declared.name)) {
@@ -34,7 +31,7 @@ export const readStructs = (declarations: Declarations, lowered: Lowered): reado
     }
     for (const { type } of declared.fields.values()) {
       if (type.kind === "struct") {
-        visit(declarations.interfaces.get(type.name), role);
+        visit(interfaces.get(type.name), role);
       }
     }
     done.set(declared.name, {
@@ -48,7 +45,7 @@ export const readStructs = (declarations: Declarations, lowered: Lowered): reado
     });
   };
   for (const [name, role] of Object.entries(lowered.roles)) {
-    visit(declarations.interfaces.get(name), role);
+    visit(interfaces.get(name), role);
   }
   return [...done.values()];
 };

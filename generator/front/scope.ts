@@ -16,8 +16,6 @@ export interface Scope {
   readonly parameters: ReadonlyMap<string, DeclaredType>;
   /** Innermost last. */
   readonly blocks: readonly Map<string, LocalName>[];
-  /** Lengths of array fields, by `Interface.field`. */
-  readonly arraySizes: Readonly<Record<string, number>>;
   readonly refusals: Refusal[];
 }
 

@@ -27,23 +27,29 @@ export const slotOf = (around: Surroundings, name: string): number => {
 /** Object names down to a place: a table's part is an object inside. */
 const pathOf = (place: Place): readonly string[] => place.fields.flatMap((field) => field.split("."));
 
-export const reach = (around: Surroundings, place: Place): Reach => {
-  const slot = slotOf(around, place.root);
-  return pathOf(place).reduce<Reach>(
-    (outer, name) => (frame) => (outer(frame) as StructObject)[name] as StructObject | number[],
-    (frame) => frame[slot] as StructObject | number[],
-  );
+/** Follows names from the object in a slot; short paths, which are nearly all, without a loop. */
+const follow = (slot: number, path: readonly string[]): Reach => {
+  const [first, second] = path;
+  switch (path.length) {
+    case 0:
+      return (frame) => frame[slot] as StructObject;
+    case 1:
+      return (frame) => (frame[slot] as StructObject)[first] as StructObject;
+    case 2:
+      return (frame) => ((frame[slot] as StructObject)[first] as StructObject)[second] as StructObject;
+    default:
+      return (frame) =>
+        path.reduce((object, name) => object[name] as StructObject, frame[slot] as StructObject);
+  }
 };
+
+export const reach = (around: Surroundings, place: Place): Reach =>
+  follow(slotOf(around, place.root), pathOf(place));
 
 /** The object that holds the place's last name, and that name. */
 export const reachHolder = (around: Surroundings, place: Place): { holder: Reach; name: string } => {
   const path = pathOf(place);
-  const slot = slotOf(around, place.root);
-  const holder = path.slice(0, -1).reduce<Reach>(
-    (outer, name) => (frame) => (outer(frame) as StructObject)[name] as StructObject,
-    (frame) => frame[slot] as StructObject,
-  );
-  return { holder, name: path[path.length - 1] };
+  return { holder: follow(slotOf(around, place.root), path.slice(0, -1)), name: path[path.length - 1] };
 };
 
 const argumentOf = (around: Surroundings, argument: Argument): ((frame: Frame) => Frame[number]) =>

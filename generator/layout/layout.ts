@@ -44,7 +44,16 @@ const innerStructs = (program: Program): ReadonlySet<string> =>
     ),
   );
 
+const known = new WeakMap<Program, Layout>();
+
+/** The layout of a program, worked out once. */
 export const layoutOf = (program: Program): Layout => {
+  const layout = known.get(program) ?? makeLayout(program);
+  known.set(program, layout);
+  return layout;
+};
+
+const makeLayout = (program: Program): Layout => {
   const inner = innerStructs(program);
   const names = namesOf(program);
   const field = ({ name, type }: Field): LayoutField => ({ name, printed: names.field(name), type });

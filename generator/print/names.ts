@@ -45,7 +45,16 @@ const remembered = (change: (name: string) => string): ((name: string) => string
   };
 };
 
+const known = new WeakMap<Program, Names>();
+
+/** Printed names of a program; worked out once, since every part of every file asks. */
 export const namesOf = (program: Program): Names => {
+  const names = known.get(program) ?? makeNames(program);
+  known.set(program, names);
+  return names;
+};
+
+const makeNames = (program: Program): Names => {
   const stem = program.name;
   const snake = remembered(snakeCase);
   const locals = localNames(program);

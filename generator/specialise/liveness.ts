@@ -25,7 +25,7 @@ export const stepsOf = (
   code: Pick<Code, "structs">,
   owner: FunctionDefinition,
   place: Place,
-): readonly { readonly struct: string; readonly field: string }[] => {
+): { readonly struct: string; readonly field: string }[] => {
   const parameter = owner.parameters.find(({ name }) => name === place.root);
   let struct: Struct | undefined =
     parameter?.type.kind === "struct" ? findStruct(code, parameter.type.name) : undefined;
@@ -234,36 +234,51 @@ const markOutputs = (marker: Marker): void => {
   }
 };
 
-/** Whether a call writes something live through the object `root` of its caller. */
-const markCallWrites = ({ code, marks }: Marker, owner: FunctionDefinition, call: CallExpression): void => {
-  code.byName.get(call.function)?.parameters.forEach((parameter, i) => {
+/** What a function writes: fields of its parameters, and objects of its parameters that it passes on. */
+interface Writes {
+  readonly owner: FunctionDefinition;
+  readonly places: readonly Place[];
+  readonly passed: readonly { readonly place: Place; readonly key: string }[];
+}
+
+const passedOn = (code: Code, call: CallExpression): Writes["passed"] =>
+  (code.byName.get(call.function)?.parameters ?? []).flatMap((parameter, i) => {
     const argument = call.arguments[i];
-    const isWritten = argument.kind === "struct" && marks.has(writeKey(call.function, parameter.name));
-    if (isWritten && isLivePlace(code, { marks }, owner, argument.place)) {
-      marks.add(writeKey(owner.name, argument.place.root));
+    const key = writeKey(call.function, parameter.name);
+    return argument.kind === "struct" ? [{ place: argument.place, key }] : [];
+  });
+
+const writesOf = (code: Code, owner: FunctionDefinition): Writes => {
+  const places: Place[] = [];
+  eachStatement(owner.body, (statement) => {
+    if (statement.kind === "assign" && statement.target.kind !== "local") {
+      places.push(statement.target.place);
     }
   });
+  const passed: Writes["passed"][number][] = [];
+  eachCallOf(owner, (call) => passed.push(...passedOn(code, call)));
+  return { owner, places, passed };
 };
 
-/** Every function's live writes, needed or not yet: they decide which calls are needed. */
-const markWrites = (marker: Marker, owner: FunctionDefinition): void => {
-  eachStatement(owner.body, (statement) => {
-    const isPlace = statement.kind === "assign" && statement.target.kind !== "local";
-    if (isPlace && isTargetLive(marker.code, marker, owner, statement)) {
-      marker.marks.add(writeKey(owner.name, (statement.target as { readonly place: Place }).place.root));
+/** A function's live writes, whether it is needed or not: they decide which calls are needed. */
+const markWrites = (marker: Marker, { owner, places, passed }: Writes): void => {
+  const written = [...places, ...passed.filter(({ key }) => marker.marks.has(key)).map(({ place }) => place)];
+  for (const place of written) {
+    if (isLivePlace(marker.code, marker, owner, place)) {
+      marker.marks.add(writeKey(owner.name, place.root));
     }
-  });
-  eachCallOf(owner, (call) => markCallWrites(marker, owner, call));
+  }
 };
 
 /** Marks what the results of the entries depend on, until a round adds nothing. */
 export const findLive = (code: Code): Live => {
   const marker: Marker = { code, marks: new Set(code.entries) };
+  const writes = code.functions.map((owner) => writesOf(code, owner));
   markOutputs(marker);
   for (let before = -1; before !== marker.marks.size; ) {
     before = marker.marks.size;
-    for (const owner of code.functions) {
-      markWrites(marker, owner);
+    for (const each of writes) {
+      markWrites(marker, each);
     }
     for (const owner of code.functions) {
       if (marker.marks.has(owner.name)) {

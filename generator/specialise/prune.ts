@@ -1,4 +1,4 @@
-import type { CallExpression, Expression } from "../ir/expression.ts";
+import type { CallExpression } from "../ir/expression.ts";
 import type { FunctionDefinition, Program, Struct } from "../ir/program.ts";
 import type { Statement } from "../ir/statement.ts";
 import {
@@ -66,32 +66,12 @@ const prunedFunction = (code: Code, live: Live, owner: FunctionDefinition): Func
   return { ...owner, parameters, body };
 };
 
-const withKeptArguments = (code: Code, live: Live, owner: FunctionDefinition): FunctionDefinition => {
-  const inExpressions = mapFunction(owner, (each: Expression) =>
-    each.kind === "call" ? { ...keptArguments(code, live, each), type: each.type } : each,
+const withKeptArguments = (code: Code, live: Live, owner: FunctionDefinition): FunctionDefinition =>
+  mapFunction(
+    owner,
+    (each) => each,
+    (call) => keptArguments(code, live, call),
   );
-  const inStatements = (body: readonly Statement[]): readonly Statement[] =>
-    body.map((each): Statement => {
-      switch (each.kind) {
-        case "call":
-          return { ...each, call: keptArguments(code, live, each.call) };
-        case "if":
-          return { ...each, whenTrue: inStatements(each.whenTrue), whenFalse: inStatements(each.whenFalse) };
-        case "switch":
-          return {
-            ...each,
-            cases: each.cases.map((one) => ({ ...one, body: inStatements(one.body) })),
-            otherwise: inStatements(each.otherwise),
-          };
-        case "for":
-        case "block":
-          return { ...each, body: inStatements(each.body) };
-        default:
-          return each;
-      }
-    });
-  return { ...inExpressions, body: inStatements(inExpressions.body) };
-};
 
 const prunedStruct = (live: Live, struct: Struct): Struct => ({
   ...struct,

@@ -1,4 +1,5 @@
 import type { RuntimeModule } from "../front/read-runtime.ts";
+import { readStructs } from "../front/read-structs.ts";
 import { rounding } from "../interpret/operations.ts";
 import type { Expression, Literal } from "../ir/expression.ts";
 import type { Constant, FunctionDefinition, Program, Struct } from "../ir/program.ts";
@@ -12,6 +13,7 @@ import { inlineTrivial } from "./inline-trivial.ts";
 import type { Known } from "./known.ts";
 import { mapFunction } from "./map-function.ts";
 import { prune } from "./prune.ts";
+import { sizeArrays } from "./size-arrays.ts";
 import { tidy } from "./tidy.ts";
 
 /** Folding, tidying and pruning feed each other until nothing changes; the runtime settles in about four rounds. */
@@ -119,8 +121,10 @@ export const specialise = (module: RuntimeModule, lowered: Lowered): Specialised
   const round = rounding(lowered.precision);
   const known = { precision: lowered.precision, structure: roundedStructure(lowered, round) };
   const entries = lowered.entries.map((entry) => entry.function);
-  let functions: readonly FunctionDefinition[] = module.functions.map((each) => roundedNumbers(each, round));
-  let structs = module.structs;
+  let structs = readStructs(module.interfaces, lowered);
+  let functions: readonly FunctionDefinition[] = reachable(module.functions, entries).map((each) =>
+    sizeArrays(roundedNumbers(each, round), structs),
+  );
   let same = 0;
   for (let i = 0; i < MOST_ROUNDS && same < 2; i++) {
     const before = sizeOf(functions, structs);

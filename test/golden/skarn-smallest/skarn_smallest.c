@@ -524,7 +524,7 @@ void skarn_smallest_step_boost(const skarn_smallest_calibration_t *calibration,
     const bool ready = state->boost_pressure.has_good;
     state->mode = choose_mode(failed, ready, boost_wanted);
     state->opening_ratio = commanded_opening(calibration, state, state->mode, boost_wanted, loop_opening);
-    if ((boost_wanted && ready) && !failed) {
+    if (boost_wanted && ready && !failed) {
         update_integral(calibration, state, unlimited, guard_floor);
     } else {
         fade_integral(calibration, state);

@@ -415,7 +415,7 @@ static bool may_integrate(const skarn24_boost_calibration_t *calibration, float 
     const bool drives_further = (saturated_open && (error > 0.0f)) || (saturated_closed && (error < 0.0f));
     const bool near = (fabsf(error) < calibration->windup_band)
         || (fabsf(rate) < calibration->windup_still_below);
-    return (!drives_further && !guard_active) && near;
+    return !drives_further && !guard_active && near;
 }
 
 /* Whether conditional integration lets the integral move in this step. */
@@ -997,7 +997,7 @@ void skarn24_boost_step_boost(const skarn24_boost_calibration_t *calibration,
     const bool ready = state->boost_pressure.has_good && speed_ready;
     state->mode = choose_mode(failed, ready, guard_active, boost_wanted);
     state->opening_ratio = commanded_opening(calibration, state, state->mode, boost_wanted, loop_opening);
-    if ((boost_wanted && ready) && !failed) {
+    if (boost_wanted && ready && !failed) {
         update_integral(calibration, state, loop_opening, guard_active);
     } else {
         fade_integral(calibration, state);

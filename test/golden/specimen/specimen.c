@@ -154,8 +154,8 @@ static float settle(specimen_inner_t *inner, float x, float step_s)
 static int32_t count_things(int32_t a, int32_t b)
 {
     const int32_t n = ((2 - a) * b) + 1;
-    const bool small = (((n < 3) || (n <= 4)) || (n > 100)) || (n >= 200);
-    return ((small && (n != 5)) && !(n == 6)) ? -n : n;
+    const bool small = (n < 3) || (n <= 4) || (n > 100) || (n >= 200);
+    return (small && (n != 5) && !(n == 6)) ? -n : n;
 }
 
 static specimen_phase_t next_phase(specimen_phase_t phase, bool enable)
