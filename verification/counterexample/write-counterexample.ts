@@ -1,4 +1,4 @@
-import { stringify } from "yaml";
+import { Document, isMap, visit } from "yaml";
 import { collectFindings } from "../../spec/diagnostics/report.ts";
 import type { LoopSpec, RequirementSpec, ScenarioSpec } from "../../spec/index.ts";
 import type { Draw } from "../draw.ts";
@@ -50,7 +50,18 @@ export function writeCounterexample(loop: LoopSpec, found: FoundViolation): stri
       ...(draw.duration !== undefined && { ends_at: `${draw.duration} s` }),
     },
   };
-  return `${HEAD}#   spoolwright replay ${name}\n${stringify(body, { lineWidth: 0, version: "1.2" })}`;
+  return `${HEAD}#   spoolwright replay ${name}\n${yamlText(body)}`;
+}
+
+/** YAML with each entry of a list on one line. */
+function yamlText(body: object): string {
+  const document = new Document(body);
+  visit(document, {
+    Seq(_, list) {
+      for (const item of list.items) if (isMap(item)) item.flow = true;
+    },
+  });
+  return document.toString({ lineWidth: 0 });
 }
 
 const HEAD = `# A run that violates a requirement, made as small as it was found to get.
