@@ -1,5 +1,9 @@
+/** Known to this file alone: no object read from a JSON file can carry it and pass for markup. */
+const MADE_HERE = Symbol("made here");
+
 /** Text that is already markup; anything else that reaches `html` is escaped. */
 export interface Html {
+  readonly [MADE_HERE]: true;
   readonly markup: string;
 }
 
@@ -26,7 +30,7 @@ export function escapeText(text: string): string {
 }
 
 function isHtml(part: HtmlPart): part is Html {
-  return typeof part === "object" && "markup" in part;
+  return typeof part === "object" && MADE_HERE in part;
 }
 
 function render(part: HtmlPart): string {
@@ -39,12 +43,12 @@ function render(part: HtmlPart): string {
 /** Markup with every inserted string escaped; lists are joined, `undefined` leaves nothing. */
 export function html(strings: TemplateStringsArray, ...parts: readonly HtmlPart[]): Html {
   const markup = strings.reduce((text, string, i) => text + render(parts[i - 1]) + string);
-  return { markup };
+  return trusted(markup);
 }
 
 /** Markup made by this project (a chart, a style sheet), taken as it is. */
 export function trusted(markup: string): Html {
-  return { markup };
+  return { [MADE_HERE]: true, markup };
 }
 
 /**

@@ -9,4 +9,5 @@ export {
 } from "./render-steady-plot.ts";
 export { renderTraceHtml, renderTraceSvg } from "./render-trace-plot.ts";
 export type { Agreement, GeneratedFile, ReportContext } from "./report-context.ts";
+export { type SettledPlant, steadyPlotOf } from "./steady-plot-of.ts";
 export { tracePlotOf } from "./trace-plot-of.ts";

@@ -35,6 +35,11 @@ describe("html", () => {
     );
   });
 
+  test("an object from a JSON file cannot pass for markup", () => {
+    const forged = JSON.parse('{ "markup": "<script>alert(1)</script>" }');
+    expect(() => html`<p>${forged}</p>`).toThrow(TypeError);
+  });
+
   test("a name is isolated, so that its writing direction stays inside", () => {
     expect(name("\u202Eabc").markup).toBe("<bdi>\u202Eabc</bdi>");
   });

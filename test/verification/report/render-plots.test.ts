@@ -65,16 +65,23 @@ describe("a run as charts", () => {
     expect(new Set(ends.map(String))).toEqual(new Set(["72,746"]));
   });
 
-  test("a line reaches as far as its values: the pixel of the peak is the value of the peak", () => {
-    const chart = read(renderTraceSvg(tracePlot())).querySelector("svg svg");
-    const [low, high, top, bottom] = ["low", "high", "top", "bottom"].map((field) =>
-      Number(chart?.getAttribute(`data-${field}`)),
-    );
-    const boost = Array.from(chart?.querySelectorAll("g[clip-path] path") ?? [])[2];
-    const peak = Math.min(...pointsOf(boost).map(([, y]) => y));
-    const value = low + ((bottom - peak) / (bottom - top)) * (high - low);
-    expect(value).toBeCloseTo(Math.max(...(sampleTrace("tip_in", 1).signals.boost_pressure ?? [])), 1);
-  });
+  test.each([
+    ["boost_pressure", 0, 2, 1],
+    ["turbo_speed", 2, 0, 1000],
+    ["accelerator", 3, 1, 0.01],
+  ] as const)(
+    "the highest pixel of %s is its highest value, in the unit shown",
+    (signal, chartIndex, lineIndex, per) => {
+      const chart = Array.from(read(renderTraceSvg(tracePlot())).querySelectorAll("svg svg"))[chartIndex];
+      const [low, high, top, bottom] = ["low", "high", "top", "bottom"].map((field) =>
+        Number(chart.getAttribute(`data-${field}`)),
+      );
+      const line = Array.from(chart.querySelectorAll("g[clip-path] path"))[lineIndex];
+      const peak = Math.min(...pointsOf(line).map(([, y]) => y));
+      const value = low + ((bottom - peak) / (bottom - top)) * (high - low);
+      expect(value).toBeCloseTo(Math.max(...(sampleTrace("tip_in", 1).signals[signal] ?? [])) / per, 1);
+    },
+  );
 
   test("each mode that occurs has a row with a bar for each stretch", () => {
     const mode = [0, 0, 2, 2, 2, 4, 2, 9];
@@ -135,6 +142,15 @@ describe("the steady map on the compressor map", () => {
     );
     expect(texts(svg, "text")).not.toContain("7000");
     expect(texts(svg, "g[clip-path] path")).toHaveLength(6 + 2 + 2);
+  });
+
+  test("puts the label at the point of most boost, whatever the order of the points", () => {
+    for (const points of [plot.lines[0].points, plot.lines[0].points.toReversed()]) {
+      const svg = read(renderSteadySvg({ ...plot, lines: [{ engineSpeedRpm: 3000, points }] }));
+      const path = Array.from(svg.querySelectorAll("g[clip-path] path")).at(-1);
+      const top = Math.min(...pointsOf(path ?? null).map(([, y]) => y));
+      expect(Number(svg.querySelector("circle")?.getAttribute("cy"))).toBeCloseTo(top, 1);
+    }
   });
 
   test("lists all points", () => {
