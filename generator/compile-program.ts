@@ -5,6 +5,7 @@ import { type Refusal, refusal } from "./front/refusals.ts";
 import type { Program } from "./ir/program.ts";
 import type { Lowered } from "./lowered.ts";
 import { stemFrom } from "./print/identifiers.ts";
+import { withSpecOrigins } from "./specialise/spec-origins.ts";
 import { specialise } from "./specialise/specialise.ts";
 import { findRecursion, validate } from "./validate/validate.ts";
 
@@ -65,6 +66,9 @@ export const compileProgram = ({ runtime, lowered }: CompileInput): Compiled => 
   )?.name;
   const program: Program = {
     ...specialised,
+    functions: specialised.functions.map((each) =>
+      withSpecOrigins(each, calibrationStruct, lowered.calibrationInfo),
+    ),
     name: stemFrom(lowered.name),
     description: lowered.description,
     source: lowered.source,

@@ -68,7 +68,7 @@ function compareReals(a: Real, b: Real): Flag {
  */
 function countThings(a: Count, b: Count): Count {
   const n: Count = (2 - a) * b + 1;
-  const small = n < 3 || n <= 4 || n > 100 || n >= 200;
+  const small = (n < 3 || a <= 4) && !(b > 100) && !(a >= 200);
   return small && n !== 5 && !(n === 6) ? -n : n;
 }
 

@@ -76,6 +76,16 @@ static float clamp(float x, float low, float high)
     return (x > high) ? high : ((x >= low) ? x : low);
 }
 
+static bool both_or_none(bool a, bool b)
+{
+    return a == b;
+}
+
+static bool one_of_two(bool a, bool b)
+{
+    return a != b;
+}
+
 static int32_t to_count(float x, int32_t low, int32_t high)
 {
     return (x >= (float)high) ? high : ((x > (float)low) ? (int32_t)x : low);
@@ -154,7 +164,7 @@ static float settle(specimen_inner_t *inner, float x, float step_s)
 static int32_t count_things(int32_t a, int32_t b)
 {
     const int32_t n = ((2 - a) * b) + 1;
-    const bool small = (n < 3) || (n <= 4) || (n > 100) || (n >= 200);
+    const bool small = ((n < 3) || (a <= 4)) && !(b > 100) && !(a >= 200);
     return (small && (n != 5) && !(n == 6)) ? -n : n;
 }
 
@@ -185,7 +195,7 @@ static specimen_phase_t next_phase(specimen_phase_t phase, bool enable)
 static bool compare_reals(float a, float b)
 {
     const bool ordered = ((a < b) || (a <= b)) && !(a > b);
-    return (ordered != (a >= b)) || (same(a, b) == is_finite(a));
+    return one_of_two(ordered, a >= b) || both_or_none(same(a, b), is_finite(a));
 }
 
 /* ---- 4 init and steps ---------------------------------------------------------------------------- */

@@ -126,7 +126,7 @@ function settle(inner: specimen_inner_t, x: number, step_s: number): number {
  */
 function count_things(a: number, b: number): number {
     const n = (Math.imul((2 - a) | 0, b) + 1) | 0;
-    const small = (n < 3) || (n <= 4) || (n > 100) || (n >= 200);
+    const small = ((n < 3) || (a <= 4)) && !(b > 100) && !(a >= 200);
     return (small && (n !== 5) && !(n === 6)) ? (-n | 0) : n;
 }
 
