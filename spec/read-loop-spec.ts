@@ -49,9 +49,7 @@ type HoledPlant = Extract<HoledLoop["plant"], object>;
 
 function inlinePlant(read: HoledPlant, findings: Findings): PlantSpec | undefined {
   checkPlant(read, findings.report);
-  return findings.anyErrorWithin(read.span)
-    ? undefined
-    : assemblePlant(read as Extract<WholeLoop["plant"], object>);
+  return findings.anyError() ? undefined : assemblePlant(read as Extract<WholeLoop["plant"], object>);
 }
 
 function readNeighbour(read: HoledLoop, open: OpenNeighbour, findings: Findings): PlantSpec | undefined {

@@ -31,14 +31,7 @@ export interface Findings {
   /** Everything reported, sorted by place, each finding once. */
   readonly sorted: () => readonly Diagnostic[];
   readonly anyError: () => boolean;
-  /** An error that starts inside a span. */
-  readonly anyErrorWithin: (span: Span) => boolean;
 }
-
-const isInside = (at: Span, outer: Span): boolean =>
-  at.file === outer.file &&
-  (at.line > outer.line || (at.line === outer.line && at.column >= outer.column)) &&
-  (at.line < outer.endLine || (at.line === outer.endLine && at.column <= outer.endColumn));
 
 const identity = (d: Diagnostic): string => `${d.code} ${d.at.file}:${d.at.line}:${d.at.column} ${d.message}`;
 
@@ -55,6 +48,5 @@ export function collectFindings(): Findings {
     include: (diagnostics) => diagnostics.forEach(keep),
     sorted: () => [...found.values()].sort(byPlace),
     anyError: () => errors().length > 0,
-    anyErrorWithin: (span) => errors().some(({ at }) => isInside(at, span)),
   };
 }

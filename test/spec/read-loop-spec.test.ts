@@ -166,8 +166,8 @@ describe("reading goes on after an error", () => {
     expect(diagnostics.map(({ code, at }) => [code, at.line])).toEqual([
       ["unknown-key", 3],
       ["wrong-unit", 4],
-      ["missing-unit", 10],
-      ["outside-limits", 14],
+      ["missing-unit", 16],
+      ["outside-limits", 25],
     ]);
   });
 
