@@ -100,9 +100,10 @@ function addPlant(program: Command, done: Done): void {
     .action(async (file: string, options: SimulateOptions) => done(await simulate(file, options)));
   add(program, "steady <plant>", "steady map of the plant over engine speed and gate opening")
     .option("--csv <file>", "write the map as CSV")
-    .action(async (plant: string, options: CommonOptions & { csv?: string }) => {
+    .option("--plot <file>", "draw it on the compressor map as .svg or .html")
+    .action(async (plant: string, options: CommonOptions & { csv?: string; plot?: string }) => {
       const { steady } = await import("./commands/steady.ts");
-      done(steady(plant, options, openSession(options)));
+      done(await steady(plant, options, openSession(options)));
     });
   add(program, "tune <spec>", "gate curve and feedforward table from the plant's steady states")
     .option("--write", "write them into the spec, comments kept")

@@ -1,6 +1,7 @@
 // The door of verification: a checked loop in, evidence, counterexamples and tuned tables out. Disk only in worker files.
 export { limitsOf } from "./build-evidence.ts";
 export { type Batch, type BatchResult, type Progress, type RunBatch, runCampaign } from "./campaign.ts";
+export { compressorMap } from "./compressor-map.ts";
 export {
   type CompiledController,
   compileController,

@@ -1,16 +1,18 @@
-import { equilibriumAt, plantParameters, standardPressure } from "../../hil-sim/index.ts";
+import { extname } from "node:path";
+import { type Equilibrium, equilibriumAt, plantParameters, standardPressure } from "../../hil-sim/index.ts";
 import type { PlantSpec } from "../../spec/index.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
 import { writeFileWhole } from "../files/write-file.ts";
 import { jsonText, mention, refuse } from "../findings.ts";
 import { loadPlant } from "../load-loop.ts";
+import { requirePlotKind } from "../plot-file.ts";
 import type { Session } from "../session.ts";
 import { csvNumber, csvText } from "../trace-csv.ts";
 
 const RADIAN_PER_RPM = Math.PI / 30;
 const OPENINGS = [0, 0.1, 0.2, 0.3, 0.4, 0.5, 0.6, 0.8, 1];
-/** K, 25 degC at sea level. */
-const AMBIENT_TEMPERATURE = 298.15;
+/** 25 degC at sea level. */
+const AMBIENT = { ambientPressure: standardPressure(0), ambientTemperature: 298.15 };
 
 interface SteadyPoint {
   readonly engine_speed_rpm: number;
@@ -32,25 +34,51 @@ function engineSpeeds(plant: PlantSpec): number[] {
   return Array.from({ length: last - first + 1 }, (_, k) => (first + k) * 1000);
 }
 
-function steadyMap(plant: PlantSpec): SteadyPoint[] {
+interface Settled {
+  readonly engineSpeedRpm: number;
+  readonly opening: number;
+  readonly equilibrium: Equilibrium;
+}
+
+function settledStates(plant: PlantSpec): Settled[] {
   const parameters = plantParameters(plant);
-  const ambient = { ambientPressure: standardPressure(0), ambientTemperature: AMBIENT_TEMPERATURE };
-  return engineSpeeds(plant).flatMap((rpm) =>
+  return engineSpeeds(plant).flatMap((engineSpeedRpm) =>
     OPENINGS.map((opening) => {
-      const point = { throttle: 1, bypass: 0, fuel: 1, engineSpeed: rpm * RADIAN_PER_RPM, ...ambient };
-      const { state, engineTorque, converged } = equilibriumAt(parameters, point, opening);
-      return {
-        engine_speed_rpm: rpm,
-        wastegate_opening_ratio: opening,
-        boost_pressure_kpa: state.boostPressure / 1000,
-        turbo_speed_rpm: state.turboSpeed / RADIAN_PER_RPM,
-        exhaust_pressure_kpa: state.exhaustPressure / 1000,
-        compressor_flow_kg_s: state.compressorFlow,
-        engine_torque_nm: engineTorque,
-        converged,
-      };
+      const engineSpeed = engineSpeedRpm * RADIAN_PER_RPM;
+      const point = { throttle: 1, bypass: 0, fuel: 1, engineSpeed, ...AMBIENT };
+      return { engineSpeedRpm, opening, equilibrium: equilibriumAt(parameters, point, opening) };
     }),
   );
+}
+
+function steadyPoint({ engineSpeedRpm, opening, equilibrium }: Settled): SteadyPoint {
+  const { state, engineTorque, converged } = equilibrium;
+  return {
+    engine_speed_rpm: engineSpeedRpm,
+    wastegate_opening_ratio: opening,
+    boost_pressure_kpa: state.boostPressure / 1000,
+    turbo_speed_rpm: state.turboSpeed / RADIAN_PER_RPM,
+    exhaust_pressure_kpa: state.exhaustPressure / 1000,
+    compressor_flow_kg_s: state.compressorFlow,
+    engine_torque_nm: engineTorque,
+    converged,
+  };
+}
+
+/** Where no steady state was found there is nothing to draw. */
+async function writeSteadyPlot(path: string, plant: PlantSpec, settled: readonly Settled[]): Promise<void> {
+  const { renderSteadyHtml, renderSteadySvg, steadyPlotOf } = await import(
+    "../../verification/report/index.ts"
+  );
+  const { compressorMap } = await import("../../verification/index.ts");
+  const parameters = plantParameters(plant);
+  const ambient = { pressure: AMBIENT.ambientPressure, temperature: AMBIENT.ambientTemperature };
+  const drawn = settled
+    .filter(({ equilibrium }) => equilibrium.converged)
+    .map(({ engineSpeedRpm, equilibrium }) => ({ engineSpeedRpm, state: equilibrium.state }));
+  const title = `Steady map of ${plant.name}: wide open throttle, 25 degC, sea level`;
+  const plot = steadyPlotOf(title, parameters, ambient, compressorMap(parameters), drawn);
+  writeFileWhole(path, extname(path) === ".svg" ? renderSteadySvg(plot) : renderSteadyHtml(plot));
 }
 
 const HEADER = "  rpm   gate  boost kPa  turbo rpm  exhaust kPa  flow kg/s  torque N*m";
@@ -79,17 +107,29 @@ function mapCsv(map: readonly SteadyPoint[]): string {
   );
 }
 
+export interface SteadyOptions {
+  readonly csv?: string;
+  readonly plot?: string;
+}
+
 /** `steady PLANT`: wide open throttle, 25 degC, sea level. */
-export function steady(plantPath: string, options: { readonly csv?: string }, session: Session): ExitCode {
+export async function steady(plantPath: string, options: SteadyOptions, session: Session): Promise<ExitCode> {
+  requirePlotKind(options.plot);
   const loaded = loadPlant(plantPath);
   if (loaded.value === undefined) return refuse(loaded, session, "nothing was computed");
   mention(loaded, session);
-  const map = steadyMap(loaded.value);
+  const settled = settledStates(loaded.value);
+  const map = settled.map(steadyPoint);
   if (options.csv !== undefined) {
     writeFileWhole(options.csv, mapCsv(map));
     session.note(`wrote ${options.csv}`);
   }
+  if (options.plot !== undefined) {
+    await writeSteadyPlot(options.plot, loaded.value, settled);
+    session.note(`wrote ${options.plot}`);
+  }
   if (session.json) session.result(jsonText({ ok: true, points: map }));
-  else if (options.csv === undefined) session.result([HEADER, ...map.map(row)].join("\n"));
+  else if (options.csv === undefined && options.plot === undefined)
+    session.result([HEADER, ...map.map(row)].join("\n"));
   return EXIT.fine;
 }

@@ -27,6 +27,22 @@ test("text, CSV and JSON tell the same; away from the closed stop a more open ga
   }
 });
 
+test("--plot draws the map as SVG or HTML, and refuses other kinds before any work", () => {
+  const folder = scratchFolder();
+  for (const [name, starts] of [
+    ["map.svg", "<?xml"],
+    ["map.html", "<!doctype html>"],
+  ]) {
+    const run = runCli(["steady", SKARN24_PLANT, "--plot", join(folder, name)]);
+    expect(run).toMatchObject({ code: 0, out: `wrote ${join(folder, name)}\n` });
+    const text = readFileSync(join(folder, name), "utf8");
+    expect(text.startsWith(starts)).toBe(true);
+    for (const label of ["surge line", "choke", "3000", "7000"]) expect(text).toContain(`>${label}</text>`);
+  }
+  const refused = runCli(["steady", SKARN24_PLANT, "--plot", join(folder, "map.png")]);
+  expect(refused).toMatchObject({ code: 2, out: "" });
+});
+
 test("a loop spec in place of a plant file is a finding", () => {
   const run = runCli(["steady", SMALLEST]);
   expect(run).toMatchObject({ code: 1, out: "" });
