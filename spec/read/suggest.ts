@@ -3,6 +3,12 @@ import { distance } from "fastest-levenshtein";
 /** Longest word worth comparing; keeps a hostile key from costing time. */
 const LONGEST = 60;
 
+const sortedLetters = (word: string): string => [...word].sort().join("");
+
+/** Edit distance, where letters in another order count once. */
+const apartness = (a: string, b: string): number =>
+  a.length === b.length && sortedLetters(a) === sortedLetters(b) ? Number(a !== b) : distance(a, b);
+
 /** The known name nearest to a misspelt one, if it is near enough to be meant. */
 export function nearestName(written: string, known: readonly string[]): string | undefined {
   const word = written.toLowerCase().replaceAll("-", "_").slice(0, LONGEST);
@@ -10,7 +16,7 @@ export function nearestName(written: string, known: readonly string[]): string |
   let best: string | undefined;
   let least = limit + 1;
   for (const name of known) {
-    const apart = distance(word, name.toLowerCase());
+    const apart = apartness(word, name.toLowerCase());
     if (apart < least) [best, least] = [name, apart];
   }
   return best;

@@ -126,7 +126,7 @@ describe("the smallest spec", () => {
 
   test("a table without a unit is a pressure ratio", () => {
     const text = SMALLEST.replace(
-      "unit: kPa abs, values: [[100, 100], [180, 200]]",
+      "unit: kPa abs\n      values: [[100, 100], [180, 200]]",
       "values: [[1, 1], [1.8, 2]]",
     );
     expect(specOf(text).controller.target.reference).toBe("pressure_ratio");
@@ -148,8 +148,8 @@ describe("the smallest spec", () => {
     const guard =
       "  overspeed_guard: { limit: 165000 rpm, margin: 3 %, trip: { after: 2 ms, torque: 25 %, release_below: 145000 rpm, release_after: 300 ms, accelerator_below: 10 %, or_after: 3 s } }\n";
     const text = SMALLEST.replace(
-      "110 kPa abs } }",
-      "110 kPa abs }, turbo_speed: { range: 0 rpm to 230 krpm } }",
+      "110 kPa abs }",
+      "110 kPa abs }\n    turbo_speed: { range: 0 rpm to 230 krpm }",
     );
     expect(specOf(text + guard).controller.failSafe.torque.value).toBe(0.25);
   });
