@@ -1,7 +1,17 @@
 // What the compiler does not copy: the text of runtime/, which the generator reads, the JSON Schema, and the
 // executable bit of the command line.
-import { chmodSync, cpSync, existsSync, mkdirSync, readdirSync, rmSync } from "node:fs";
+import {
+  chmodSync,
+  cpSync,
+  existsSync,
+  mkdirSync,
+  readdirSync,
+  readFileSync,
+  rmSync,
+  writeFileSync,
+} from "node:fs";
 import { join } from "node:path";
+import { pathToFileURL } from "node:url";
 import { root } from "./prepare.mjs";
 
 const build = join(root, "build");
@@ -20,6 +30,16 @@ function copySchema() {
   if (existsSync(from)) cpSync(from, join(build, "spec/spoolwright.schema.json"));
 }
 
+/** The parsed runtime beside its text, so that `generate` need not load the TypeScript compiler. */
+async function packRuntimeText() {
+  const folder = join(build, "runtime-text");
+  const { packRuntime } = await import(pathToFileURL(join(build, "generator/index.js")).href);
+  const names = readdirSync(folder).filter((name) => name.endsWith(".ts"));
+  const texts = names.sort().map((name) => [name, readFileSync(join(folder, name), "utf8")]);
+  writeFileSync(join(folder, "parsed.json"), packRuntime(new Map(texts)));
+}
+
 copyRuntimeText();
 copySchema();
+await packRuntimeText();
 chmodSync(join(build, "cli/main.js"), 0o755);

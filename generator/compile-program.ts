@@ -1,6 +1,6 @@
 import { createHash } from "node:crypto";
 import { addCalibrationCheck } from "./calibration/check-function.ts";
-import { readRuntime } from "./front/read-runtime.ts";
+import { parsedRuntime } from "./front/prepared-runtime.ts";
 import { type Refusal, refusal } from "./front/refusals.ts";
 import type { Program } from "./ir/program.ts";
 import type { Lowered } from "./lowered.ts";
@@ -37,21 +37,12 @@ const missingEntries = (
       ),
     );
 
-const remembered = new WeakMap<ReadonlyMap<string, string>, ReturnType<typeof readRuntime>>();
-
-/** The runtime's text is parsed once per map: it is the same for every spec. */
-const parsed = (runtime: ReadonlyMap<string, string>): ReturnType<typeof readRuntime> => {
-  const known = remembered.get(runtime) ?? readRuntime(runtime);
-  remembered.set(runtime, known);
-  return known;
-};
-
 /**
  * The passes in their order: front (text to typed IR), specialise (the spec's structure fixed, the rest dropped),
  * validate, and the calibration's own check added. Pure; every refusal names a line of the runtime.
  */
 export const compileProgram = ({ runtime, lowered }: CompileInput): Compiled => {
-  const { module, refusals } = parsed(runtime);
+  const { module, refusals } = parsedRuntime(runtime);
   const early = [
     ...refusals,
     ...missingEntries(lowered, module.functions),

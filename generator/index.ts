@@ -8,6 +8,7 @@ export { printHarness } from "./c/harness.ts";
 export { ARITHMETIC, WARNINGS } from "./c/makefile.ts";
 export { printC } from "./c/print-c.ts";
 export { type Compiled, type CompileInput, compileProgram } from "./compile-program.ts";
+export { packRuntime, useParsedRuntime } from "./front/prepared-runtime.ts";
 export { REFUSALS, type Refusal, type RefusalCode } from "./front/refusals.ts";
 export { type InterpretedFunction, interpretProgram } from "./interpret/interpret-program.ts";
 export type { Value } from "./interpret/operations.ts";

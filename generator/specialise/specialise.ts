@@ -114,6 +114,21 @@ const simplified = (
   return inlineTrivial(folded.map((each) => tidy(each, effects)));
 };
 
+/** Simplified until two rounds have changed nothing: what one round makes constant, the next one folds. */
+const settled = (
+  start: readonly FunctionDefinition[],
+  known: Omit<Known, "locals">,
+  entries: readonly string[],
+): readonly FunctionDefinition[] => {
+  let functions = start;
+  for (let round = 0, same = 0; round < MOST_ROUNDS && same < 2; round++) {
+    const before = sizeOf(functions, []);
+    functions = reachable(simplified(functions, known, entries), entries);
+    same = sizeOf(functions, []) === before ? same + 1 : 0;
+  }
+  return functions;
+};
+
 export type Specialised = Pick<Program, "functions" | "structs" | "constants" | "enumerations">;
 
 /** Fixes the spec's structure in the runtime: folds, drops what it does not choose, and what only that used. */
@@ -125,12 +140,10 @@ export const specialise = (module: RuntimeModule, lowered: Lowered): Specialised
   let functions: readonly FunctionDefinition[] = reachable(module.functions, entries).map((each) =>
     sizeArrays(roundedNumbers(each, round), structs),
   );
-  let same = 0;
-  for (let i = 0; i < MOST_ROUNDS && same < 2; i++) {
-    const before = sizeOf(functions, structs);
-    functions = reachable(simplified(functions, known, entries), entries);
+  for (let round = 0, before = -1; round < MOST_ROUNDS && before !== sizeOf(functions, structs); round++) {
+    functions = settled(functions, known, entries);
+    before = sizeOf(functions, structs);
     ({ functions, structs } = prune({ functions, structs }, entries));
-    same = sizeOf(functions, structs) === before ? same + 1 : 0;
   }
   functions = countArrays(reachable(functions, entries));
   const enumerations = usedEnumerations(functions, structs);
