@@ -22,6 +22,8 @@ export interface VerifyOptions {
   /** Most simulations spent on making one violation small. */
   readonly shrinkBudget: number;
   readonly form: ControllerFacts["form"];
+  /** The spec as read, where only some of its tests are run: the hashes are of the whole. */
+  readonly whole?: LoopSpec;
   readonly codeFigures?: CodeFigures;
   readonly onProgress?: (progress: Progress) => void;
 }
@@ -64,7 +66,7 @@ export async function verifyLoop(
       description: plant.description,
       ...(loop.plantFile !== undefined && { file: loop.plantFile }),
     },
-    hashes: loopHashes(loop),
+    hashes: loopHashes(options.whole ?? loop),
     scenarios: loop.scenarios.map((scenario, i) => scenarioFacts(scenario, campaign.random[i], runs)),
     requirements: results,
     traces,
@@ -120,6 +122,12 @@ function shrinkResult(
   const small = shrink(scenario, start, (draw) => run(draw).margins[column], options.shrinkBudget);
   const requirement = requirements[column];
   const { draw, margin, simulations } = small;
-  const text = writeCounterexample(loop, { scenario, requirement, draw, margin, hashes: loopHashes(loop) });
+  const text = writeCounterexample(loop, {
+    scenario,
+    requirement,
+    draw,
+    margin,
+    hashes: loopHashes(options.whole ?? loop),
+  });
   return { text, simulations };
 }
