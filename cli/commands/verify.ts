@@ -1,14 +1,14 @@
 import { availableParallelism } from "node:os";
-import { basename, dirname, join, relative, resolve } from "node:path";
+import { dirname, join } from "node:path";
 import type { LoopSpec } from "../../spec/index.ts";
 import {
   evidenceText,
   loadController,
-  type RequirementResult,
   startWorkers,
   type Verified,
   verifyLoop,
 } from "../../verification/index.ts";
+import type { ReportContext } from "../../verification/report/index.ts";
 import { generatedController } from "../controller.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
 import { writeFileWhole } from "../files/write-file.ts";
@@ -18,6 +18,7 @@ import { openProgress } from "../progress.ts";
 import { reportContext } from "../report-context.ts";
 import { requireTests, selectTests } from "../require-tests.ts";
 import type { Session } from "../session.ts";
+import { jsonRow, requirementLine, violationText } from "../verify-text.ts";
 import { VERSION } from "../version.ts";
 
 export interface VerifyCommandOptions {
@@ -36,10 +37,11 @@ const CORNERS = 20;
 const SHRINK_BUDGET = 400;
 
 async function runCampaign(
-  loop: LoopSpec,
+  whole: LoopSpec,
   options: VerifyCommandOptions,
   session: Session,
 ): Promise<Verified> {
+  const loop = selectTests(whole, options.only);
   const controller = generatedController(loop);
   const port = await loadController(controller, loop);
   const { seed, runs } = options;
@@ -53,6 +55,7 @@ async function runCampaign(
       corners: CORNERS,
       shrinkBudget: SHRINK_BUDGET,
       form: "generated typescript",
+      whole,
       onProgress: ({ done, total }) => progress.update(done, total),
     });
   } finally {
@@ -65,39 +68,21 @@ async function runCampaign(
 const counterexampleFolder = ({ evidence, report }: VerifyCommandOptions): string =>
   dirname(evidence ?? report ?? "x");
 
-/** The command that runs a counterexample again from here. */
-function replayCommand(specPath: string, file: string): string {
-  const beside = join(dirname(file), basename(specPath));
-  const spec = resolve(beside) === resolve(specPath) ? "" : ` --spec ${relative(".", specPath)}`;
-  return `spoolwright replay ${file}${spec}`;
-}
-
+/** Writes what was asked for; the report is made first, so that a failure leaves nothing behind. */
 async function writeAll(
   verified: Verified,
-  loop: LoopSpec,
   options: VerifyCommandOptions,
+  context: ReportContext | undefined,
 ): Promise<string[]> {
-  const written: string[] = [];
-  const write = (path: string, text: string): void => {
-    writeFileWhole(path, text);
-    written.push(path);
-  };
-  // The report is made before anything is written, so that a failure leaves nothing behind.
-  const report = options.report === undefined ? undefined : await reportText(verified, loop, options);
-  for (const { name, text } of verified.counterexamples)
-    write(join(counterexampleFolder(options), name), text);
-  if (options.evidence !== undefined) write(options.evidence, evidenceText(verified.evidence));
-  if (options.report !== undefined && report !== undefined) write(options.report, report);
-  return written;
-}
-
-async function reportText(
-  verified: Verified,
-  loop: LoopSpec,
-  options: VerifyCommandOptions,
-): Promise<string> {
-  const { renderReport } = await import("../../verification/report/index.ts");
-  return renderReport(verified.evidence, reportContext(loop, options.agreement));
+  const folder = counterexampleFolder(options);
+  const files = new Map(verified.counterexamples.map(({ name, text }) => [join(folder, name), text]));
+  if (options.evidence !== undefined) files.set(options.evidence, evidenceText(verified.evidence));
+  if (options.report !== undefined) {
+    const { renderReport } = await import("../../verification/report/index.ts");
+    files.set(options.report, renderReport(verified.evidence, context));
+  }
+  for (const [path, text] of files) writeFileWhole(path, text);
+  return [...files.keys()];
 }
 
 /** `verify SPEC`: the campaign of random and corner runs, its evidence, counterexamples and report. */
@@ -109,73 +94,38 @@ export async function verify(
   const loaded = loadLoop(specPath);
   if (loaded.value === undefined) return refuse(loaded, session, "nothing was verified");
   mention(loaded, session);
-  const loop = selectTests(loaded.value, options.only);
-  requireTests(loop);
+  requireTests(selectTests(loaded.value, options.only));
+  const context = options.report === undefined ? undefined : reportContext(loaded.value, options.agreement);
   const begun = performance.now();
-  const verified = await runCampaign(loop, options, session);
+  const verified = await runCampaign(loaded.value, options, session);
   const seconds = (performance.now() - begun) / 1000;
-  const written = await writeAll(verified, loop, options);
-  const { requirements, simulations, seed } = verified.evidence;
-  const ok = requirements.every(({ verdict }) => verdict !== "violated");
-  const folder = counterexampleFolder(options);
+  const written = await writeAll(verified, options, context);
+  return tell(verified, { specPath, folder: counterexampleFolder(options), seconds, written }, session);
+}
+
+interface Told {
+  readonly specPath: string;
+  readonly folder: string;
+  readonly seconds: number;
+  readonly written: readonly string[];
+}
+
+function tell(
+  { evidence }: Verified,
+  { specPath, folder, seconds, written }: Told,
+  session: Session,
+): ExitCode {
+  const { requirements, simulations, seed } = evidence;
+  const violated = requirements.filter(({ verdict }) => verdict === "violated");
+  const ok = violated.length === 0;
   if (session.json) {
     const rows = requirements.map((result) => jsonRow(result, folder));
     session.result(jsonText({ ok, seed, simulations, seconds, requirements: rows }));
   } else {
     for (const result of requirements) session.note(requirementLine(result));
-    for (const result of requirements)
-      if (result.verdict === "violated") session.complain(violation(result, specPath, folder));
+    for (const result of violated) session.complain(violationText(result, specPath, folder));
     session.note(`seed ${seed}: ${simulations} simulations in ${seconds.toFixed(1)} s`);
     for (const path of written) session.note(`wrote ${path}`);
   }
   return ok ? EXIT.fine : EXIT.findings;
-}
-
-function jsonRow(result: RequirementResult, folder: string) {
-  const { id, scenario, verdict, runs, exercised, violations, worst, counterexample } = result;
-  return {
-    id,
-    scenario,
-    verdict,
-    runs,
-    exercised,
-    violations,
-    worst_margin: worst?.margin ?? null,
-    violation_probability_upper_95: result.violationProbabilityUpper95,
-    counterexample: counterexample === undefined ? null : join(folder, counterexample),
-  };
-}
-
-const VERDICTS = { holds: "holds", violated: "violated", not_exercised: "not exercised" } as const;
-
-function requirementLine({
-  id,
-  scenario,
-  verdict,
-  exercised,
-  worst,
-  violationProbabilityUpper95,
-}: RequirementResult): string {
-  const margin = worst === undefined ? "" : `, worst margin ${worst.margin.toFixed(3)}`;
-  const bound =
-    exercised > 0 ? `, violation below ${(violationProbabilityUpper95 * 100).toPrecision(2)} % (95 %)` : "";
-  return `${VERDICTS[verdict].padEnd(13)} ${id.padEnd(24)} ${scenario.padEnd(16)} ${exercised} runs${margin}${bound}`;
-}
-
-/** What broke, where it is written, and the command that shows it again. */
-function violation(result: RequirementResult, specPath: string, folder: string): string {
-  const { id, says, scenario, exercised, violations, corners, worst, at, counterexample } = result;
-  const inRandom = `${violations} of ${exercised} random runs`;
-  const where =
-    corners.violations > 0
-      ? `${inRandom} and ${corners.violations} of ${corners.runs} corner runs`
-      : inRandom;
-  const margin = (violations > 0 ? worst : corners.worst)?.margin.toFixed(3);
-  const again =
-    counterexample === undefined ? [] : [`  again: ${replayCommand(specPath, join(folder, counterexample))}`];
-  return [
-    `requirement \`${id}\` violated in ${where} of \`${scenario}\`; worst margin ${margin}`,
-    `  ${says}   ${at.file}:${at.line}`,
-    ...again,
-  ].join("\n");
 }
