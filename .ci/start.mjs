@@ -1,20 +1,30 @@
 // npm start: from a clean clone to the report of the complete example, with nothing but Node and gcc.
+import { spawnSync } from "node:child_process";
 import { join } from "node:path";
 import { prepare, root, run } from "./prepare.mjs";
 
 const SPEC = "examples/skarn24/skarn24.yaml";
-const cli = join(root, "build/cli/main.js");
+const OUT = "out/skarn24";
+const REPORT = `${OUT}-report.html`;
+
+/** Runs one command of spoolwright and shows it; ends with its exit code when it is not 0. */
+function step(...args) {
+  console.log(`\n$ spoolwright ${args.join(" ")}`);
+  const code = run(process.execPath, [join(root, "build/cli/main.js"), ...args]);
+  if (code !== 0) process.exit(code);
+}
 
 prepare();
 
-const steps = [
-  ["check", SPEC],
-  ["generate", SPEC, "--out", "out/skarn24"],
-  ["verify", SPEC, "--evidence", "out/skarn24-evidence.json", "--report", "out/skarn24-report.html"],
-];
-
-for (const step of steps) {
-  console.log(`\n$ spoolwright ${step.join(" ")}`);
-  const code = run(process.execPath, [cli, ...step]);
-  if (code !== 0) process.exit(code);
+const begun = performance.now();
+const files = ["--evidence", `${OUT}-evidence.json`, "--report", REPORT];
+step("check", SPEC);
+step("generate", SPEC, "--out", OUT);
+if (spawnSync("gcc", ["--version"], { stdio: "ignore" }).status === 0) {
+  step("agree", SPEC, "--out", `${OUT}-agreement.json`);
+  step("verify", SPEC, "--agreement", `${OUT}-agreement.json`, ...files);
+} else {
+  console.log("\ngcc is not installed: the generated C was not compiled and not compared");
+  step("verify", SPEC, ...files);
 }
+console.log(`\nThe report: ${REPORT}   (${((performance.now() - begun) / 1000).toFixed(0)} s)`);
