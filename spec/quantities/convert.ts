@@ -53,8 +53,31 @@ export function convertExactly(text: string, from: Unit, to: Unit, level: LevelK
   return add(scaled, divide(STANDARD_ATMOSPHERE_PA, squareRoot(to.squaredFactor)));
 }
 
-/** As `convertExactly`, rounded once to the nearest double. A number already in its base unit takes the short way. */
-export function convertQuantity(text: string, from: Unit, to: Unit, level: LevelKind): number {
-  const same = from.text === to.text && from.scale === undefined && level !== "gauge_pressure";
-  return same ? Number(text) : nearestDouble(convertExactly(text, from, to, level));
+/** k when x is 10^k. */
+function decimalShift({ numerator, denominator }: Rational): number | undefined {
+  if (numerator !== 1n && denominator !== 1n) return undefined;
+  const digits = String(numerator * denominator);
+  if (!/^10*$/.test(digits)) return undefined;
+  return denominator === 1n ? digits.length - 1 : 1 - digits.length;
 }
+
+/** The number times 10^shift by its text alone: the engine reads decimals correctly rounded. */
+function shifted(text: string, shift: number): number {
+  const [mantissa, exponent = "0"] = text.toLowerCase().split("e");
+  return Number(`${mantissa}e${Number(exponent) + shift}`);
+}
+
+/** Converts decimals as `convertExactly` does, rounded once to the nearest double; powers of ten take the short way. */
+export function converter(from: Unit, to: Unit, level: LevelKind): (text: string) => number {
+  const scales = from.scale !== undefined && level === "temperature_level";
+  if (scales || level === "gauge_pressure")
+    return (text) => nearestDouble(convertExactly(text, from, to, level));
+  if (from.text === to.text) return Number;
+  const factor = factorBetween(from, to);
+  const shift = decimalShift(factor);
+  if (shift !== undefined) return (text) => shifted(text, shift);
+  return (text) => nearestDouble(multiply(decimal(text), factor));
+}
+
+export const convertQuantity = (text: string, from: Unit, to: Unit, level: LevelKind): number =>
+  converter(from, to, level)(text);

@@ -1,4 +1,4 @@
-import { convertQuantity } from "../quantities/convert.ts";
+import { converter } from "../quantities/convert.ts";
 import type { Limits, UnitChoice } from "../table/kind.ts";
 import { entryOf, type MapNode, type Node } from "../text/node.ts";
 import { startOf } from "../text/positions.ts";
@@ -46,7 +46,10 @@ export function readNumbers(
     });
     return undefined;
   }
-  const values = node.items.map((item, i) => readNumber(item, match, limits, nth(i, place), context));
+  const convert = match && converter(match.unit, match.choice.base, match.level);
+  const values = node.items.map((item, i) =>
+    readNumber(item, match, convert, limits, nth(i, place), context),
+  );
   return values.every((value) => value !== undefined) ? (values as number[]) : undefined;
 }
 
@@ -59,6 +62,7 @@ export const nth = (index: number, place: Place): Place => ({
 function readNumber(
   node: Node,
   match: Match | undefined,
+  convert: ((text: string) => number) | undefined,
   limits: Limits,
   place: Place,
   context: Context,
@@ -69,8 +73,8 @@ function readNumber(
     refuseListed(text, node, place, context);
     return undefined;
   }
-  if (match === undefined) return undefined;
-  const value = convertQuantity(text, match.unit, match.choice.base, match.level);
+  if (match === undefined || convert === undefined) return undefined;
+  const value = convert(text);
   const amount = { value, written: `${text} ${match.text}`.trim(), at: node.at, number: text, match };
   return checkLimits(amount, limits, place, context) ? value : undefined;
 }

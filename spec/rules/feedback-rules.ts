@@ -95,6 +95,16 @@ function checkGainAxes({ controller: { feedback } }: Seen, report: Report): void
 function checkTrim({ controller: { feedback } }: Seen, report: Report): void {
   const trim = feedback?.trimLimits;
   if (feedback === undefined || trim === undefined) return;
+  if (feedback.coordinate === "opening" && Math.max(-trim.low.value, trim.high.value) > 1) {
+    report({
+      code: "outside-actuator",
+      at: feedback.places.trim_limits,
+      message: `\`trim_limits\` ${trim.low.written} to ${trim.high.written} are more than the whole opening`,
+      label: "within -100 % to 100 %",
+      fix: "trim_limits: -20 % to 20 %",
+    });
+    return;
+  }
   if (trim.low.value <= 0 && trim.high.value >= 0) return;
   report({
     code: "limits-exclude-zero",

@@ -7,6 +7,7 @@ import { speedQuantum } from "./signal-rules.ts";
 /** The overspeed guard. */
 export const checkGuard: Rule = (seen, report) => {
   checkParts(seen, report);
+  checkFloor(seen, report);
   checkSensorRange(seen, report);
   checkMargin(seen, report);
   checkOrder(seen, report);
@@ -52,6 +53,20 @@ function checkParts({ controller: { overspeedGuard: guard } }: Seen, report: Rep
         fix: `remove \`${key}\`, or add \`gain\``,
       });
   }
+}
+
+/** Without feedforward the floor starts from a closed valve: measured on the invented engine A, the turbo passes its limit. */
+function checkFloor({ controller }: Seen, report: Report): void {
+  const gainAt = writtenAt(controller.overspeedGuard, "gain");
+  if (gainAt === undefined || writtenAt(controller, "feedforward") !== undefined) return;
+  report({
+    code: "guard-floor-without-feedforward",
+    at: gainAt,
+    message:
+      "the proportional guard has no feedforward to start from, so its floor starts from a closed valve",
+    label: "the valve opens late",
+    fix: "add `feedforward`, or rely on `trip` alone",
+  });
 }
 
 /** A speed beyond the believed range still trips, but the proportional part never sees it. */

@@ -80,7 +80,8 @@ export const ENGINEERING_CODES = {
   },
   "outside-actuator": {
     severity: "error",
-    cause: "The safe or the rest opening is one that the actuator may not be asked for.",
+    cause:
+      "The safe or rest opening, or the integral's limits, are beyond what the actuator may be asked for.",
     example: "opening: 0 % to 90 %\nsafe_opening: 100 %",
     fix: "Use an opening inside the actuator's range, or widen the range if the part allows it.",
   },
@@ -116,6 +117,14 @@ export const ENGINEERING_CODES = {
     cause: "The overspeed guard has neither a gain nor a trip, so it would never act.",
     example: "overspeed_guard: { limit: 165000 rpm, margin: 3 % }",
     fix: "Add `gain` and `reference_speed`, or `trip`, or both.",
+  },
+  "guard-floor-without-feedforward": {
+    severity: "warning",
+    cause:
+      "The proportional guard opens the valve to at least the feedforward at its safe pressure ratio. Without a feedforward that floor starts from a closed valve, and the valve opens late.",
+    example:
+      "overspeed_guard: { gain: 20.9 mm2/krpm, reference_speed: 158000 rpm, ... }   # and no feedforward",
+    fix: "Add `feedforward`, or leave the guard to `trip`.",
   },
   "guard-margin-small": {
     severity: "warning",
