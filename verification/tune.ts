@@ -6,6 +6,7 @@ import {
   wastegateArea,
 } from "../hil-sim/index.ts";
 import type { CurveSpec, LoopSpec, TableSpec } from "../spec/index.ts";
+import { monotonicTable } from "./monotonic-table.ts";
 import { setInSpec } from "./set-in-spec.ts";
 
 const RADIAN_PER_RPM = 0.10471975511965977;
@@ -63,7 +64,7 @@ function feedforwardOpenings(parameters: PlantParameters, table: TableSpec) {
       return found.opening;
     }),
   );
-  return { openings: monotonic(openings, table), outOfReach };
+  return { openings: monotonicTable(openings, table.columns.length), outOfReach };
 }
 
 /** The opening that holds a boost Pa at an engine speed, or the end stop that comes nearest and why. */
@@ -90,20 +91,6 @@ function holding(
 
 function bar(pascal: number): string {
   return `${(pascal / 1e5).toFixed(2)} bar abs`;
-}
-
-/** More pressure never asks for a more open gate, more engine speed never for a more closed one. */
-function monotonic(openings: readonly number[], table: TableSpec): number[] {
-  const columns = table.columns.length;
-  const result = [...openings];
-  for (let i = 0; i < result.length; i++) {
-    const above = i >= columns ? result[i - columns] : 1;
-    result[i] = Math.min(result[i], above);
-  }
-  for (let i = 0; i < result.length; i++) {
-    if (i % columns > 0) result[i] = Math.max(result[i], result[i - 1]);
-  }
-  return result;
 }
 
 /** The spec's text with the tuned values in place, comments kept. */

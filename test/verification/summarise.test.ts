@@ -38,6 +38,10 @@ describe("the summary of margins", () => {
     );
   });
 
+  it("counts the edge itself, 0, as holding", () => {
+    expect(summarise(Float64Array.of(0, 1))).toMatchObject({ verdict: "holds", violations: 0 });
+  });
+
   it("gives nearest-rank quantiles: of 1..100 the 5th, 50th and 95th value", () => {
     const list = Float64Array.from({ length: 100 }, (_, k) => (100 - k) / 100);
     expect(summarise(list).margins?.quantiles).toEqual({

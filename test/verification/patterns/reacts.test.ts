@@ -68,6 +68,10 @@ describe("reacts", () => {
     expect(reacts(trace([0, 0, 1, 1, 1, 1, 0, 0]), guard)).toBe(0);
     expect(reacts(trace([0, 0, 1, 1, 0, 0.5, 1, 0]), guard)).toBe(-1);
   });
+  it("counts an answer that came in time though the trace ends before the time is over", () => {
+    const trace = traceOf(1, 3, { turbo_speed: [1, 1, 166], wastegate_command: [0, 0, 1] });
+    expect(reacts(trace, guard)).toBe(0);
+  });
   it("is not exercised when the event never comes, or the trace ends before the answer is due", () => {
     const gate = [0, 0, 0];
     expect(reacts(traceOf(1, 3, { turbo_speed: [1, 1, 1], wastegate_command: gate }), guard)).toBeUndefined();

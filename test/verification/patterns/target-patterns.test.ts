@@ -131,6 +131,17 @@ describe("rises", () => {
     expect(at(0.9) - at(0.1)).toBeCloseTo(seconds, 2);
   });
 
+  it("starts from the boost there was, not from the former target", () => {
+    const wanted = (t: number) => (t < 0.9995 ? 100 : 200);
+    const boost = (t: number) => (t < 1.4995 ? 120 : t < 1.9995 ? 185 : 200);
+    const trace = traceOf(0.001, 5000, { boost_wanted: wanted, boost_pressure: boost });
+    // 80 % of the way from 120 is 184 kPa, covered at 0.5 s; 85 % from 100 would be 185, from 120 it is 188.
+    const margin = (fraction: number) =>
+      rises(trace, findCommands(trace), { kind: "rises", fraction, within: 2 });
+    expect(margin(0.8)).toBeCloseTo((2 - 0.5) / 2, 9);
+    expect(margin(0.85)).toBeCloseTo((2 - 1) / 2, 9);
+  });
+
   it("never covered: time over plus the missing part, at least -3", () => {
     expect(risesFrom((t) => (t <= 0 ? 0 : 0.45), 0.9, 2, 5000)).toBeCloseTo((2 - 3.999) / 2 - 0.5, 9);
     expect(risesFrom((t) => (t <= 0 ? 0 : -4), 0.9, 2, 5000)).toBe(-3);
