@@ -1,6 +1,7 @@
 import { parseHTML } from "linkedom";
 import { describe, expect, test } from "vitest";
 import {
+  renderReport,
   renderSteadyHtml,
   renderSteadySvg,
   renderTraceHtml,
@@ -160,4 +161,19 @@ describe("the steady map on the compressor map", () => {
     expect(rows).toHaveLength(5);
     expect(rows[0]).toEqual(["3000", "0.000", "243.1", "90\u202F000", "0.1200", "2.400"]);
   });
+});
+
+test("a run that flows backwards or below ambient stays inside its map", () => {
+  const base = sampleEvidence();
+  const trace = sampleTrace("tip_in", 1);
+  const operating = { correctedFlowKgS: [0.05, -0.04, 0.3, 0.9], pressureRatio: [1.2, 0.7, 5.5, 2] };
+  const page = read(renderReport({ ...base, traces: [{ ...trace, operating }] }));
+  const run = Array.from(page.querySelectorAll("#map-1-figure g[clip-path] path")).at(-1);
+  for (const [x, y] of pointsOf(run ?? null)) {
+    expect(x).toBeGreaterThanOrEqual(72);
+    expect(x).toBeLessThanOrEqual(726);
+    expect(y).toBeGreaterThanOrEqual(24);
+    expect(y).toBeLessThanOrEqual(432);
+  }
+  expect(pointsOf(run ?? null)).toHaveLength(4);
 });

@@ -85,7 +85,7 @@ describe("the report", () => {
     expect(detail).toContain("engine_speed 5931.25 rpm");
     expect(detail).toContain("with a probability below 0.30 %");
     expect(words(document, "#requirement-3")).toContain(
-      "spoolwright replay turbo_speed_below_limit-boost_sensor_stuck.counterexample.yaml",
+      "spoolwright replay turbo_speed_below_limit-boost_sensor_stuck.counterexample.yaml --spec examples/skarn24/skarn24.yaml",
     );
   });
 

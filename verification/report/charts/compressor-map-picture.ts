@@ -60,7 +60,8 @@ function frameOf(map: CompressorMap, tracks: readonly MapTrack[]): Frame {
   const most = (values: readonly number[], otherwise: number): number =>
     values.reduce((a, b) => Math.max(a, b), otherwise);
   const least = tracked.filter(isShown).reduce((a, [flow]) => Math.min(a, flow), 0);
-  return { x: [least * 1.05, most(flows, 0.01) * 1.03], y: [0.9, most(ratios, 1.1) * 1.04] };
+  const lowest = tracked.filter(isShown).reduce((a, [, ratio]) => Math.min(a, ratio), 0.92);
+  return { x: [least * 1.05, most(flows, 0.01) * 1.03], y: [lowest - 0.02, most(ratios, 1.1) * 1.04] };
 }
 
 function pathMark(points: readonly MapPoint[], role: LineRole): Markish {

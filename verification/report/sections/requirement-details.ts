@@ -45,10 +45,10 @@ function plural(runs: number): string {
   return `${whole(runs)} random ${runs === 1 ? "run" : "runs"}`;
 }
 
-function counterexample(file: string | undefined): Html | undefined {
+function counterexample(evidence: Evidence, file: string | undefined): Html | undefined {
   return file === undefined
     ? undefined
-    : html`<p>Smallest manoeuvre found that violates it, again: ${replayCommand(file)}</p>`;
+    : html`<p>Smallest manoeuvre found that violates it, again: ${replayCommand(evidence, file)}</p>`;
 }
 
 function detail(evidence: Evidence, result: RequirementResult, index: number): Html {
@@ -59,7 +59,7 @@ function detail(evidence: Evidence, result: RequirementResult, index: number): H
 <p>${testedSentence(result)} ${cornerSentence(result)}</p>
 <p class="source">Pattern ${code(result.pattern)}, written at ${name(`${result.at.file}:${result.at.line}`)}; the
 scenario at line ${result.scenarioLine}.</p>
-${counterexample(result.counterexample)}
+${counterexample(evidence, result.counterexample)}
 <div class="pair"><div>${worstRun(evidence, "worst random run", result.worst)}
 ${worstRun(evidence, "worst corner run", result.corners.worst)}</div>
 <div>${spread(result, index)}</div></div>

@@ -28,14 +28,14 @@ function lowest(worst: WorstRun | undefined): string {
   return worst === undefined ? "" : `, lowest margin ${margin(worst.margin)}`;
 }
 
-function violation({ result, index }: Placed): Html {
+function violation(evidence: Evidence, { result, index }: Placed): Html {
   const { corners, counterexample } = result;
   return html`<li><a href="#${slug("requirement", index)}">${name(result.id)}</a> on ${name(result.scenario)}:
 ${name(sentence(result.says))} ${plural(result.violations, "violation")} in ${plural(result.exercised, "random run")}${lowest(result.worst)};
 ${plural(corners.violations, "violation")} in ${plural(corners.exercised, "corner run")}${lowest(corners.worst)}.${
     counterexample === undefined
       ? undefined
-      : html` Replay the smallest manoeuvre found: ${replayCommand(counterexample)}`
+      : html` Replay the smallest manoeuvre found: ${replayCommand(evidence, counterexample)}`
   }</li>`;
 }
 
@@ -51,6 +51,6 @@ ${plural(evidence.runsPerScenario, "run")} each, all of the kind <em>tested</em>
 ${plural(evidence.extraSimulations.corner, "corner run")} and
 ${plural(evidence.extraSimulations.shrink, "run")} spent on making counterexamples smaller.
 Nothing here is proved or searched.</p>
-${violated.length === 0 ? undefined : html`<ul class="violations">${violated.map(violation)}</ul>`}
+${violated.length === 0 ? undefined : html`<ul class="violations">${violated.map((placed) => violation(evidence, placed))}</ul>`}
 </section>`;
 }
