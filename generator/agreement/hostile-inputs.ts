@@ -108,7 +108,11 @@ export const hostileFrames = (layout: FrameLayout, seed: number, count: number):
           : pick < manner.special + manner.bits
             ? anyReal(random, layout.wordBytes)
             : walk[i];
-      words.setReal(frame * width + 1 + i, value);
+      if (layout.input[i].type.kind === "real") {
+        words.setReal(frame * width + 1 + i, value);
+      } else {
+        words.setWhole(frame * width + 1 + i, random.below(2));
+      }
     });
   }
   return { count, words, ...steps };

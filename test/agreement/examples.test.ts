@@ -1,22 +1,35 @@
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { type AgreementSubject, agree, prepareAgreement } from "../../cli/native/agree.ts";
 import { NATIVE_BUILDS } from "../../cli/native/builds.ts";
-import { firstDifference, layoutOf, type Program, printC, printHarness } from "../../generator/index.ts";
+import {
+  firstDifference,
+  layoutOf,
+  type Precision,
+  type Program,
+  printC,
+  printHarness,
+} from "../../generator/index.ts";
+import { specimenProgram } from "../generator/specimen/lowered.ts";
 import { SKARN24, SMALLEST } from "../support/smallest.ts";
 import { cannotUse } from "../support/tool.ts";
 import { compileSpec, exampleSpec, runtimeText } from "./compile-spec.ts";
 
 const builds = NATIVE_BUILDS.filter(({ compiler }) => compiler === "gcc" || !cannotUse("clang"));
 
+const example = (file: string, precision: Precision) => () =>
+  compileSpec(exampleSpec(file), runtimeText(), precision);
+
 describe.each([
-  [SMALLEST, "float32"],
-  [SMALLEST, "float64"],
-  [SKARN24, "float32"],
-  [SKARN24, "float64"],
-] as const)("%s at %s", (file, precision) => {
+  ["the specimen at float32", () => specimenProgram()],
+  ["the specimen at float64", () => specimenProgram({ precision: "float64" })],
+  ["the smallest example at float32", example(SMALLEST, "float32")],
+  ["the smallest example at float64", example(SMALLEST, "float64")],
+  ["the complete example at float32", example(SKARN24, "float32")],
+  ["the complete example at float64", example(SKARN24, "float64")],
+] as const)("%s", (_, make) => {
   let subject: AgreementSubject | undefined;
   beforeAll(async () => {
-    subject = await prepareAgreement(compileSpec(exampleSpec(file), runtimeText(), precision), builds);
+    subject = await prepareAgreement(make(), builds);
   }, 300_000);
   afterAll(() => subject?.remove());
 
