@@ -25,12 +25,13 @@ export function boundOf(text: string, choice: UnitChoice): number {
 const LARGEST = 1e18;
 const SMALLEST = 1e-18;
 
-const isComputable = (value: number): boolean =>
-  value === 0 || (Math.abs(value) <= LARGEST && Math.abs(value) >= SMALLEST);
+/** A tiny value is as good as zero, and wrong only where zero is. */
+const isComputable = (value: number, { above }: Limits): boolean =>
+  Math.abs(value) <= LARGEST && (above === undefined || value === 0 || Math.abs(value) >= SMALLEST);
 
 /** True when the value can be computed with and is inside the limits; else reports the first that is broken. */
 export function checkLimits(amount: Amount, limits: Limits, place: Place, context: Context): boolean {
-  if (!isComputable(amount.value)) {
+  if (!isComputable(amount.value, limits)) {
     context.report({
       code: "not-finite",
       at: amount.at,

@@ -49,8 +49,12 @@ function readKey(
   return node && readKind(node, of, placeOfKey(key, example), key, context);
 }
 
-const standardNode = (text: string, at: Span): Node =>
-  text === "{}" ? { kind: "map", entries: [], at } : { kind: "scalar", text, quoted: text === "", at };
+/** Defaults are single values, or an empty map or list. */
+function standardNode(text: string, at: Span): Node {
+  if (text === "{}") return { kind: "map", entries: [], at };
+  if (text === "[]") return { kind: "list", items: [], at };
+  return { kind: "scalar", text, quoted: text === "", at };
+}
 
 /** A whole file, as its table says; the one place where the table's types meet what was read. */
 export const readFile = <const Keys extends KeySet>(

@@ -1,6 +1,6 @@
 import { existsSync, readFileSync, writeFileSync } from "node:fs";
 import { describe, expect, test } from "vitest";
-import { CATALOGUE, explain, renderDiagnostics } from "../../spec/index.ts";
+import { CATALOGUE, type Diagnostic, explain, renderDiagnostics } from "../../spec/index.ts";
 import { CASES, caseNames, readCase } from "./read-case.ts";
 
 const OPTIONS = { colour: false, width: 80, consequence: "nothing was written" };
@@ -14,6 +14,40 @@ describe("each case folder", () => {
     if (ACCEPT === name || ACCEPT === "all") writeFileSync(expected, rendered);
     const wanted = existsSync(expected) ? readFileSync(expected, "utf8") : "";
     expect(rendered, `accept with: ACCEPT_CASE=${name} npx vitest run test/diagnostics`).toBe(wanted);
+  });
+});
+
+/** `key: value` on one line, without brackets. */
+const ONE_LINE = /^([a-z_]+): ([^{}[\]#]+)$/;
+
+/** The case's text with the fix in the place of the key the finding points into; undefined when there is no such line. */
+function repaired(text: string, { at, fix = "" }: Diagnostic): string | undefined {
+  const [, key] = ONE_LINE.exec(fix) ?? [];
+  const lines = text.split("\n");
+  const line = lines[at.line - 1] ?? "";
+  const start = line.lastIndexOf(` ${key}:`, at.column - 1) + 1;
+  if (key === undefined || at.file !== "loop.yaml" || start === 0) return undefined;
+  const [old] = /^[a-z_]+: *("[^"]*"|[^,{}[\]]*)/.exec(line.slice(start)) ?? [""];
+  lines[at.line - 1] = line.slice(0, start) + fix + line.slice(start + old.length);
+  return lines.join("\n");
+}
+
+describe("a fix that is one line", () => {
+  const fixable = caseNames().flatMap((name) => {
+    const { diagnostics, sources } = readCase(name);
+    const text = diagnostics.length === 1 ? repaired(sources[0]?.text ?? "", diagnostics[0]) : undefined;
+    return text === undefined ? [] : [{ name, text, diagnostic: diagnostics[0] }];
+  });
+
+  test("is offered by many cases", () => {
+    expect(fixable.length).toBeGreaterThan(30);
+  });
+
+  test.each(fixable)("can be pasted: $name", ({ name, text, diagnostic }) => {
+    const again = readCase(name, text).diagnostics;
+    expect(
+      again.filter(({ code, at }) => code === diagnostic.code && at.line === diagnostic.at.line),
+    ).toEqual([]);
   });
 });
 

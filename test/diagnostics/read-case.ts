@@ -15,9 +15,10 @@ export interface CaseResult {
   readonly accepted: boolean;
 }
 
-export function readCase(name: string): CaseResult {
+/** Reads a case; `text` stands in for its loop.yaml. */
+export function readCase(name: string, text?: string): CaseResult {
   const folder = new URL(`${name}/`, CASES);
-  const decoded = decodeSource("loop.yaml", padded(folder, readFileSync(new URL("loop.yaml", folder))));
+  const decoded = decodeSource("loop.yaml", bytesOf(folder, text));
   if (decoded.source === undefined) return { diagnostics: decoded.diagnostics, sources: [], accepted: false };
   const plant = plantOf(folder);
   const open = (path: string) => (path === "./engine.plant.yaml" ? plant : undefined);
@@ -25,6 +26,11 @@ export function readCase(name: string): CaseResult {
   const sources = [decoded.source, ...(plant === undefined ? [] : [plant])];
   return { diagnostics, sources, accepted: spec !== undefined };
 }
+
+const bytesOf = (folder: URL, text: string | undefined): Uint8Array =>
+  text === undefined
+    ? padded(folder, readFileSync(new URL("loop.yaml", folder)))
+    : new TextEncoder().encode(text);
 
 function padded(folder: URL, bytes: Buffer): Uint8Array {
   const file = new URL("padding.txt", folder);
