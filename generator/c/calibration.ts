@@ -10,7 +10,7 @@ import { hexFloat, shortestDecimal } from "../print/numbers.ts";
 import { banner } from "./text.ts";
 
 const STEP = "    ";
-const PER_LINE = 4;
+const PER_LINE = 6;
 
 const sourceText = ({ at }: CalibrationInfo): string => {
   const name = at?.file.split("/").pop();
@@ -41,6 +41,7 @@ const printArray = (
   path: string,
   printed: string,
   values: readonly number[],
+  width: number,
   indent: string,
 ): readonly string[] => {
   const { program } = around;
@@ -48,11 +49,19 @@ const printArray = (
   const about = commentText(
     `[${around.indices.get(path) ?? 0}] ${info?.unit ?? ""}${info === undefined ? "" : sourceText(info)}`,
   );
-  const rows = chunks(values, PER_LINE).map((row) => {
-    const texts = row.map((each) => `${literal(around, each, undefined)},`).join(" ");
-    return `${indent}${STEP}${texts} /* ${row.map((each) => shortestDecimal(each, program.precision)).join(" ")} */`;
-  });
+  const rows = chunks(values, width).flatMap((row) => printRow(around, row, indent + STEP));
   return [`${indent}/* ${about} */`, `${indent}.${printed} = {`, ...rows, `${indent}},`];
+};
+
+/** The row in decimals above its exact values. */
+const printRow = (around: Around, row: readonly number[], indent: string): readonly string[] => {
+  const decimals = row.map((each) => shortestDecimal(each, around.program.precision)).join(" ");
+  return [
+    `${indent}/* ${decimals} */`,
+    ...chunks(row, PER_LINE).map(
+      (part) => `${indent}${part.map((each) => `${literal(around, each, undefined)},`).join(" ")}`,
+    ),
+  ];
 };
 
 const printStruct = (
@@ -73,7 +82,9 @@ const printStruct = (
       ];
     }
     if (type.kind === "array") {
-      return printArray(around, inner, printed, value as number[], indent);
+      const columns = object[printed.replace(/_values$/, "_columns")];
+      const width = Array.isArray(columns) ? columns.length : PER_LINE;
+      return printArray(around, inner, printed, value as number[], width, indent);
     }
     const info = around.program.calibrationInfo[inner];
     const enumeration = type.kind === "enum" ? type.name : undefined;

@@ -2,7 +2,7 @@ import type { Enumeration, Field, Program, Struct } from "../ir/program.ts";
 import { findFunction } from "../ir/program.ts";
 import { layoutOf, layoutStruct } from "../layout/layout.ts";
 import type { StructRole } from "../lowered.ts";
-import { blockComment } from "../print/comment-text.ts";
+import { blockComment, commentText } from "../print/comment-text.ts";
 import { upperCase } from "../print/identifiers.ts";
 import { type Names, namesOf } from "../print/names.ts";
 import { wrap } from "../print/wrap.ts";
@@ -47,7 +47,20 @@ const printField = (
       : type.kind === "array"
         ? `${cReal(program.precision)} ${printed}[${type.size}]`
         : `${cType(names, type, program.precision)} ${printed}`;
-  return [...blockComment(doc, STEP), `${STEP}${qualifier}${text};`];
+  const about = struct.name === program.calibrationStruct ? unitAndRange(program, name) : "";
+  return [...blockComment(doc, STEP), `${STEP}${qualifier}${text};${about}`];
+};
+
+/** Wider limits than this say no more than "finite". */
+const TELLING_LIMIT = 1e8;
+
+/** What the check allows, beside a calibration value: `kPa abs, 1 to 2000`. */
+const unitAndRange = (program: Program, path: string): string => {
+  const { unit = "", low, high } = program.calibrationInfo[path] ?? {};
+  const isTold =
+    low !== undefined && high !== undefined && Math.abs(low) < TELLING_LIMIT && high < TELLING_LIMIT;
+  const parts = [unit, ...(isTold ? [`${low} to ${high}`] : [])].filter((part) => part !== "");
+  return parts.length === 0 ? "" : ` /* ${commentText(parts.join(", "))} */`;
 };
 
 const printStruct = (program: Program, names: Names, struct: Struct): readonly string[] => [

@@ -30,9 +30,16 @@ const piecesAt = (line: string, breaks: readonly Break[], depth: number): readon
   return cuts.slice(1).map((cut, i) => line.slice(cuts[i], cut));
 };
 
-/** An assignment is broken after its sign only when the rest then fits on one line. */
-const isWorthIt = (line: string, at: number, indent: number): boolean =>
-  line.slice(at - 3, at) !== " = " || indent + line.length - at <= WIDTH;
+const isAssignment = (line: string, { at }: Break): boolean => line.slice(at - 3, at) === " = ";
+
+/** After its sign when the rest of an assignment then fits on one line, and only there; else anywhere but there. */
+const chosenBreaks = (line: string, indent: number): readonly Break[] => {
+  const inside = breaksOf(line).filter(({ at }) => at > indent);
+  const fitting = inside.filter(
+    (each) => isAssignment(line, each) && indent + 4 + line.length - each.at <= WIDTH,
+  );
+  return fitting.length > 0 ? fitting : inside.filter((each) => !isAssignment(line, each));
+};
 
 /** Breaks a line of C or TypeScript that is too wide, at the outermost brackets first; the text stays the same code. */
 export const wrap = (line: string): readonly string[] => {
@@ -41,8 +48,7 @@ export const wrap = (line: string): readonly string[] => {
   }
   const indent = /^ */.exec(line)?.[0] ?? "";
   const inner = `${indent}    `;
-  const inside = breaksOf(line).filter(({ at }) => at > indent.length);
-  const breaks = inside.filter(({ at }) => isWorthIt(line, at, inner.length));
+  const breaks = chosenBreaks(line, indent.length);
   if (breaks.length === 0) {
     return [line];
   }

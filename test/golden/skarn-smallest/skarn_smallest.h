@@ -41,33 +41,33 @@ typedef struct {
  */
 typedef struct {
     skarn_smallest_signal_calibration_t engine_speed;
-    float engine_speed_otherwise_rpm;
+    float engine_speed_otherwise_rpm; /* rpm, 0 to 1000000 */
     skarn_smallest_signal_calibration_t accelerator;
-    float accelerator_otherwise_ratio;
+    float accelerator_otherwise_ratio; /* ratio, 0 to 1 */
     skarn_smallest_signal_calibration_t boost_pressure;
     skarn_smallest_signal_calibration_t ambient_pressure;
-    float ambient_pressure_otherwise_kpa;
+    float ambient_pressure_otherwise_kpa; /* kPa, 1 to 2000 */
     /* Rows over accelerator, columns over engine speed; kPa abs, kPa gauge or pressure ratio. */
-    float target_boost_rows[3];
-    float target_boost_columns[3];
-    float target_boost_values[9];
-    float boost_ceiling_kpa;
-    float least_boost_kpa;
-    float target_rise_kpa_per_s;
-    float target_fall_kpa_per_s;
-    float proportional_gain;
-    float integral_gain;
-    float setpoint_weight_ratio;
-    float trim_low;
-    float trim_high;
-    float tracking_time_s;
-    float opening_low_ratio;
-    float opening_high_ratio;
-    float slew_open_ratio_per_s;
-    float slew_close_ratio_per_s;
-    float safe_opening_ratio;
-    float rest_opening_ratio;
-    float fail_safe_torque_ratio;
+    float target_boost_rows[3]; /* ratio */
+    float target_boost_columns[3]; /* rpm */
+    float target_boost_values[9]; /* kPa abs, 0 to 2000 */
+    float boost_ceiling_kpa; /* kPa abs, 1 to 2000 */
+    float least_boost_kpa; /* kPa */
+    float target_rise_kpa_per_s; /* kPa/s */
+    float target_fall_kpa_per_s; /* kPa/s */
+    float proportional_gain; /* ratio/kPa */
+    float integral_gain; /* ratio/kPa/s */
+    float setpoint_weight_ratio; /* ratio, 0 to 2 */
+    float trim_low; /* ratio */
+    float trim_high; /* ratio */
+    float tracking_time_s; /* s, 0.000001 to 1000 */
+    float opening_low_ratio; /* ratio, 0 to 1 */
+    float opening_high_ratio; /* ratio, 0 to 1 */
+    float slew_open_ratio_per_s; /* 1/s */
+    float slew_close_ratio_per_s; /* 1/s */
+    float safe_opening_ratio; /* ratio, 0 to 1 */
+    float rest_opening_ratio; /* ratio, 0 to 1 */
+    float fail_safe_torque_ratio; /* ratio, 0 to 1 */
 } skarn_smallest_calibration_t;
 
 /* This step's conditioned signals. */

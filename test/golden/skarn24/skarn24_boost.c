@@ -413,8 +413,8 @@ static bool may_integrate(const skarn24_boost_calibration_t *calibration, float 
     bool saturated_closed, bool saturated_open, bool guard_active)
 {
     const bool drives_further = (saturated_open && (error > 0.0f)) || (saturated_closed && (error < 0.0f));
-    const bool near = (fabsf(error) < calibration->windup_band)
-        || (fabsf(rate) < calibration->windup_still_below);
+    const bool near =
+        (fabsf(error) < calibration->windup_band) || (fabsf(rate) < calibration->windup_still_below);
     return !drives_further && !guard_active && near;
 }
 
@@ -869,12 +869,12 @@ static float guard_floor(const skarn24_boost_calibration_t *calibration, skarn24
 {
     const float open = highest_coordinate(calibration);
     const float over = speed_rpm - calibration->guard_reference_speed_rpm;
-    const float integral_rate = (calibration->guard_gain_per_rpm * calibration->guard_integral_rate_per_s)
-        * over;
+    const float integral_rate =
+        (calibration->guard_gain_per_rpm * calibration->guard_integral_rate_per_s) * over;
     state->guard_integral_term =
         clamp(state->guard_integral_term + (integral_rate * GUARD_STEP_S), 0.0f, open);
-    const float proportional = calibration->guard_gain_per_rpm
-        * (predicted_rpm - calibration->guard_reference_speed_rpm);
+    const float proportional =
+        calibration->guard_gain_per_rpm * (predicted_rpm - calibration->guard_reference_speed_rpm);
     return clamp((base + proportional) + state->guard_integral_term, 0.0f, open);
 }
 

@@ -29,10 +29,10 @@ typedef struct {
 /* Calibration: constant while a step runs; check it before the first step. */
 typedef struct {
     /* Output over input. */
-    float curve_axis[3];
-    float curve_values[3];
+    float curve_axis[3]; /* kPa */
+    float curve_values[3]; /* kPa */
     specimen_limits_t limits;
-    int32_t steps;
+    int32_t steps; /* steps of 10 ms, 0 to 1000 */
     bool armed;
 } specimen_calibration_t;
 

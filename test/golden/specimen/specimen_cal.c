@@ -9,11 +9,13 @@
 const specimen_calibration_t specimen_calibration_default = {
     /* [0] kPa  specimen.yaml:7 */
     .curve_axis = {
-        0x0p+0f, 0x1.9p+5f, 0x1.9p+6f, /* 0 50 100 */
+        /* 0 50 100 */
+        0x0p+0f, 0x1.9p+5f, 0x1.9p+6f,
     },
     /* [3] kPa  specimen.yaml:8 */
     .curve_values = {
-        0x1.99999ap-4f, 0x1.cp+2f, 0x1.9p+3f, /* 0.1 7 12.5 */
+        /* 0.1 7 12.5 */
+        0x1.99999ap-4f, 0x1.cp+2f, 0x1.9p+3f,
     },
     .limits = {
         .low = -0x1.4p+4f, /* [6] -20 kPa  specimen.yaml:9 */
