@@ -1,6 +1,6 @@
 /* skarn24_boost.c - the controller; every + - * / below rounds once, at float32
  * Boost loop of the Skarn Hill 2.4 l hill-climb prototype (invented)
- * Generated from skarn24.yaml, meaning 371aa1b5d2f5e477. Edit that file instead of this one.
+ * Generated from skarn24.yaml, meaning acddfcc9d1d05aa9. Edit that file instead of this one.
  * Contents: 1 assumptions  2 helpers and constants  3 blocks in run order  4 init and steps
  */
 #include "skarn24_boost.h"
@@ -188,6 +188,7 @@ static void initialise_stuck_check(skarn24_boost_stuck_check_state_t *state)
 
 static void initialise_floor(skarn24_boost_fast_state_t *state)
 {
+    initialise_low_pass(&state->turbo_speed_filter);
     for (int32_t i = 0; i < ACCELERATION_STEPS; i++) {
         state->speed_history_rpm[i] = 0.0f;
     }
@@ -824,6 +825,13 @@ static float guard_speed(const skarn24_boost_calibration_t *calibration, skarn24
     return speed;
 }
 
+/* Speed for the prediction, rpm: filtered if the spec asks for it. */
+static float filtered_turbo_speed(const skarn24_boost_calibration_t *calibration,
+    skarn24_boost_fast_state_t *state, float speed_rpm)
+{
+    return low_pass(&state->turbo_speed_filter, speed_rpm, calibration->turbo_speed_filter_s, GUARD_STEP_S);
+}
+
 /* Turbo acceleration, rpm/s, over the whole window: one quantum of a counting sensor then moves it little.
  * Zero until the window is filled.
  *   a = (N[k] - N[k-n]) / (n dt)
@@ -1027,7 +1035,7 @@ void skarn24_boost_step_guard(const skarn24_boost_calibration_t *calibration,
         torque_limit = calibration->fail_safe_torque_ratio;
     }
     const float base = exchange->guard_base;
-    const float filtered = speed;
+    const float filtered = filtered_turbo_speed(calibration, state, speed);
     const float acceleration = turbo_acceleration(state, filtered);
     const float predicted = predicted_speed(calibration, filtered, acceleration, speed);
     const float floor = guard_floor(calibration, state, base, predicted, speed);
@@ -1096,71 +1104,72 @@ int32_t skarn24_boost_check_calibration(const skarn24_boost_calibration_t *calib
     bad = bad_count(calibration->turbo_speed_rate.window_steps, 1, 1000000, 31, bad);
     bad = bad_count(calibration->turbo_speed_stuck.steps, 0, 1000000, 32, bad);
     bad = bad_real(calibration->turbo_speed_stuck.moved, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 33, bad);
-    bad = bad_real(calibration->turbo_speed_gain_per_step_rpm, 0.0f, 1000000.0f, 34, bad);
+    bad = bad_real(calibration->turbo_speed_filter_s, 0.0f, 1000.0f, 34, bad);
+    bad = bad_real(calibration->turbo_speed_gain_per_step_rpm, 0.0f, 1000000.0f, 35, bad);
     bad = bad_array(calibration->target_boost_rows, 6, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 35, bad);
-    bad = bad_axis(calibration->target_boost_rows, 6, 35, bad);
+        0x1.dcd65p+29f /* 1000000000 */, 36, bad);
+    bad = bad_axis(calibration->target_boost_rows, 6, 36, bad);
     bad = bad_array(calibration->target_boost_columns, 6, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 41, bad);
-    bad = bad_axis(calibration->target_boost_columns, 6, 41, bad);
-    bad = bad_array(calibration->target_boost_values, 36, 0.0f, 2000.0f, 47, bad);
-    bad = bad_real(calibration->air_reference_temperature_k, 100.0f, 2000.0f, 83, bad);
-    bad = bad_real(calibration->air_strength_ratio, 0.0f, 2.0f, 84, bad);
-    bad = bad_real(calibration->air_at_most_ratio, 0.0f, 1.0f, 85, bad);
-    bad = bad_real(calibration->boost_ceiling_kpa, 1.0f, 2000.0f, 86, bad);
-    bad = bad_real(calibration->pressure_ratio_ceiling, 1.0f, 1000.0f, 87, bad);
-    bad = bad_real(calibration->least_boost_kpa, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 88, bad);
-    bad = bad_real(calibration->target_rise_kpa_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 89, bad);
-    bad = bad_real(calibration->target_fall_kpa_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 90, bad);
+        0x1.dcd65p+29f /* 1000000000 */, 42, bad);
+    bad = bad_axis(calibration->target_boost_columns, 6, 42, bad);
+    bad = bad_array(calibration->target_boost_values, 36, 0.0f, 2000.0f, 48, bad);
+    bad = bad_real(calibration->air_reference_temperature_k, 100.0f, 2000.0f, 84, bad);
+    bad = bad_real(calibration->air_strength_ratio, 0.0f, 2.0f, 85, bad);
+    bad = bad_real(calibration->air_at_most_ratio, 0.0f, 1.0f, 86, bad);
+    bad = bad_real(calibration->boost_ceiling_kpa, 1.0f, 2000.0f, 87, bad);
+    bad = bad_real(calibration->pressure_ratio_ceiling, 1.0f, 1000.0f, 88, bad);
+    bad = bad_real(calibration->least_boost_kpa, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 89, bad);
+    bad = bad_real(calibration->target_rise_kpa_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 90, bad);
+    bad = bad_real(calibration->target_fall_kpa_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 91, bad);
     bad = bad_array(calibration->gate_area_axis, 9, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 91, bad);
-    bad = bad_axis(calibration->gate_area_axis, 9, 91, bad);
-    bad = bad_array(calibration->gate_area_values, 9, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 100, bad);
-    bad = bad_axis(calibration->gate_area_values, 9, 100, bad);
+        0x1.dcd65p+29f /* 1000000000 */, 92, bad);
+    bad = bad_axis(calibration->gate_area_axis, 9, 92, bad);
+    bad = bad_array(calibration->gate_area_values, 9, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 101, bad);
+    bad = bad_axis(calibration->gate_area_values, 9, 101, bad);
     bad = bad_array(calibration->feedforward_rows, 6, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 109, bad);
-    bad = bad_axis(calibration->feedforward_rows, 6, 109, bad);
+        0x1.dcd65p+29f /* 1000000000 */, 110, bad);
+    bad = bad_axis(calibration->feedforward_rows, 6, 110, bad);
     bad = bad_array(calibration->feedforward_columns, 8, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 115, bad);
-    bad = bad_axis(calibration->feedforward_columns, 8, 115, bad);
-    bad = bad_array(calibration->feedforward_values, 48, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 123, bad);
+        0x1.dcd65p+29f /* 1000000000 */, 116, bad);
+    bad = bad_axis(calibration->feedforward_columns, 8, 116, bad);
+    bad = bad_array(calibration->feedforward_values, 48, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 124, bad);
     bad = bad_real(calibration->proportional_gain, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 171, bad);
-    bad = bad_real(calibration->integral_gain, -0x1.dcd65p+29f /* -1000000000 */,
         0x1.dcd65p+29f /* 1000000000 */, 172, bad);
-    bad = bad_real(calibration->derivative_gain, -0x1.dcd65p+29f /* -1000000000 */,
+    bad = bad_real(calibration->integral_gain, -0x1.dcd65p+29f /* -1000000000 */,
         0x1.dcd65p+29f /* 1000000000 */, 173, bad);
-    bad = bad_real(calibration->derivative_filter_s, 0.0f, 1000.0f, 174, bad);
-    bad = bad_real(calibration->setpoint_weight_ratio, 0.0f, 2.0f, 175, bad);
+    bad = bad_real(calibration->derivative_gain, -0x1.dcd65p+29f /* -1000000000 */,
+        0x1.dcd65p+29f /* 1000000000 */, 174, bad);
+    bad = bad_real(calibration->derivative_filter_s, 0.0f, 1000.0f, 175, bad);
+    bad = bad_real(calibration->setpoint_weight_ratio, 0.0f, 2.0f, 176, bad);
     bad = bad_real(calibration->trim_low, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 176, bad);
-    bad = bad_real(calibration->trim_high, -0x1.dcd65p+29f /* -1000000000 */,
         0x1.dcd65p+29f /* 1000000000 */, 177, bad);
-    bad = bad_real(calibration->windup_band, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 178, bad);
-    bad = bad_real(calibration->windup_still_below, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 179, bad);
-    bad = bad_real(calibration->opening_low_ratio, 0.0f, 1.0f, 180, bad);
-    bad = bad_real(calibration->opening_high_ratio, 0.0f, 1.0f, 181, bad);
-    bad = bad_real(calibration->slew_open_ratio_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 182, bad);
-    bad = bad_real(calibration->slew_close_ratio_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 183, bad);
-    bad = bad_real(calibration->safe_opening_ratio, 0.0f, 1.0f, 184, bad);
-    bad = bad_real(calibration->rest_opening_ratio, 0.0f, 1.0f, 185, bad);
-    bad = bad_real(calibration->speed_limit_rpm, 0.0f, 1000000.0f, 186, bad);
-    bad = bad_real(calibration->speed_ceiling_rpm, 0.0f, 1000000.0f, 187, bad);
-    bad = bad_real(calibration->guard_lead_s, 0.0f, 1000.0f, 188, bad);
-    bad = bad_real(calibration->guard_reference_speed_rpm, 0.0f, 1000000.0f, 189, bad);
-    bad = bad_real(calibration->guard_gain_per_rpm, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 190, bad);
-    bad = bad_real(calibration->guard_integral_rate_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 191, bad);
-    bad = bad_real(calibration->guard_safe_pressure_ratio, 1.0f, 1000.0f, 192, bad);
+    bad = bad_real(calibration->trim_high, -0x1.dcd65p+29f /* -1000000000 */,
+        0x1.dcd65p+29f /* 1000000000 */, 178, bad);
+    bad = bad_real(calibration->windup_band, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 179, bad);
+    bad = bad_real(calibration->windup_still_below, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 180, bad);
+    bad = bad_real(calibration->opening_low_ratio, 0.0f, 1.0f, 181, bad);
+    bad = bad_real(calibration->opening_high_ratio, 0.0f, 1.0f, 182, bad);
+    bad = bad_real(calibration->slew_open_ratio_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 183, bad);
+    bad = bad_real(calibration->slew_close_ratio_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 184, bad);
+    bad = bad_real(calibration->safe_opening_ratio, 0.0f, 1.0f, 185, bad);
+    bad = bad_real(calibration->rest_opening_ratio, 0.0f, 1.0f, 186, bad);
+    bad = bad_real(calibration->speed_limit_rpm, 0.0f, 1000000.0f, 187, bad);
+    bad = bad_real(calibration->speed_ceiling_rpm, 0.0f, 1000000.0f, 188, bad);
+    bad = bad_real(calibration->guard_lead_s, 0.0f, 1000.0f, 189, bad);
+    bad = bad_real(calibration->guard_reference_speed_rpm, 0.0f, 1000000.0f, 190, bad);
+    bad = bad_real(calibration->guard_gain_per_rpm, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 191, bad);
+    bad = bad_real(calibration->guard_integral_rate_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 192, bad);
+    bad = bad_real(calibration->guard_safe_pressure_ratio, 1.0f, 1000.0f, 193, bad);
     bad = bad_real(calibration->guard_target_reduction_kpa_per_rpm, 0.0f, 0x1.dcd65p+29f /* 1000000000 */,
-        193, bad);
-    bad = bad_real(calibration->guard_target_release_kpa_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 194,
+        194, bad);
+    bad = bad_real(calibration->guard_target_release_kpa_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 195,
         bad);
-    bad = bad_count(calibration->trip_after_steps, 0, 1000000, 195, bad);
-    bad = bad_real(calibration->trip_torque_ratio, 0.0f, 1.0f, 196, bad);
-    bad = bad_real(calibration->trip_release_below_rpm, 0.0f, 1000000.0f, 197, bad);
-    bad = bad_count(calibration->trip_release_after_steps, 0, 1000000, 198, bad);
-    bad = bad_real(calibration->trip_accelerator_below_ratio, 0.0f, 1.0f, 199, bad);
-    bad = bad_count(calibration->trip_or_after_steps, 0, 1000000, 200, bad);
-    bad = bad_real(calibration->fail_safe_torque_ratio, 0.0f, 1.0f, 201, bad);
+    bad = bad_count(calibration->trip_after_steps, 0, 1000000, 196, bad);
+    bad = bad_real(calibration->trip_torque_ratio, 0.0f, 1.0f, 197, bad);
+    bad = bad_real(calibration->trip_release_below_rpm, 0.0f, 1000000.0f, 198, bad);
+    bad = bad_count(calibration->trip_release_after_steps, 0, 1000000, 199, bad);
+    bad = bad_real(calibration->trip_accelerator_below_ratio, 0.0f, 1.0f, 200, bad);
+    bad = bad_count(calibration->trip_or_after_steps, 0, 1000000, 201, bad);
+    bad = bad_real(calibration->fail_safe_torque_ratio, 0.0f, 1.0f, 202, bad);
     return bad;
 }
