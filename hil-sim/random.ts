@@ -28,16 +28,29 @@ function finalise(value: number): number {
 
 /** The next 32 bits, as a signed integer. */
 export function nextBits(state: RandomState): number {
-  const s1 = state[1];
-  const fives = Math.imul(s1, 5);
-  const result = Math.imul((fives << 7) | (fives >>> 25), 9);
-  state[2] ^= state[0];
-  state[3] ^= s1;
-  state[1] ^= state[2];
-  state[0] ^= state[3];
-  state[2] ^= s1 << 9;
-  state[3] = (state[3] << 11) | (state[3] >>> 21);
-  return result;
+  const word = new Int32Array(1);
+  fillBits(state, word);
+  return word[0];
+}
+
+/** Fills `words` with the next 32-bit integers; the state stays in local variables meanwhile, which is several times faster. */
+export function fillBits(state: RandomState, words: Int32Array): void {
+  let [a, b, c, d] = state;
+  for (let i = 0; i < words.length; i++) {
+    const fives = Math.imul(b, 5);
+    words[i] = Math.imul((fives << 7) | (fives >>> 25), 9);
+    const shifted = b << 9;
+    c ^= a;
+    d ^= b;
+    b ^= c;
+    a ^= d;
+    c ^= shifted;
+    d = (d << 11) | (d >>> 21);
+  }
+  state[0] = a;
+  state[1] = b;
+  state[2] = c;
+  state[3] = d;
 }
 
 /** Uniform in [0, 1), 32 bits. */
@@ -57,12 +70,16 @@ const PER_DEVIATION = 1 / Math.sqrt(65535);
 /** Normal deviates of mean 0 and variance 1, made in blocks. */
 export interface NormalSource {
   readonly random: RandomState;
+  /** Three words make a deviate. */
+  readonly words: Int32Array;
   readonly deviates: Float64Array;
   next: number;
 }
 
+const BLOCK = 300;
+
 export function normalSource(random: RandomState): NormalSource {
-  return { random, deviates: new Float64Array(240), next: 240 };
+  return { random, words: new Int32Array(3 * BLOCK), deviates: new Float64Array(BLOCK), next: BLOCK };
 }
 
 export function nextNormal(source: NormalSource): number {
@@ -73,9 +90,10 @@ export function nextNormal(source: NormalSource): number {
 }
 
 function fillNormals(source: NormalSource): void {
-  const { random, deviates } = source;
+  const { random, words, deviates } = source;
+  fillBits(random, words);
   for (let i = 0; i < deviates.length; i++) {
-    const sum = byteSum(nextBits(random)) + byteSum(nextBits(random)) + byteSum(nextBits(random));
+    const sum = byteSum(words[3 * i]) + byteSum(words[3 * i + 1]) + byteSum(words[3 * i + 2]);
     deviates[i] = (sum - 1530) * PER_DEVIATION;
   }
   source.next = 0;

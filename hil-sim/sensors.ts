@@ -25,6 +25,7 @@ interface PressureSensor {
   readonly lowKpa: number;
   readonly highKpa: number;
   readonly stepKpa: number;
+  readonly stepsPerKpa: number;
   readingKpa: number;
 }
 
@@ -95,7 +96,9 @@ export function settledSensors(
 }
 
 function pressureSensor(spec: PressureSensorSpec, pressure: number, noise: number): PressureSensor {
-  const steps = Math.max(1, Math.imul(1, 1 << Math.min(spec.bits, 30)) - 1);
+  let codes = 2;
+  for (let bit = 1; bit < spec.bits; bit++) codes *= 2;
+  const steps = codes - 1;
   return {
     pressure,
     lagKpa: pressure / 1000,
@@ -105,6 +108,7 @@ function pressureSensor(spec: PressureSensorSpec, pressure: number, noise: numbe
     lowKpa: spec.range[0] / 1000,
     highKpa: spec.range[1] / 1000,
     stepKpa: (spec.range[1] - spec.range[0]) / 1000 / steps,
+    stepsPerKpa: (1000 * steps) / (spec.range[1] - spec.range[0]),
     readingKpa: 0.5,
   };
 }
@@ -156,7 +160,7 @@ function updatePressure(sensor: PressureSensor, noise: NormalSource): void {
   sensor.lagKpa += (sensor.pressure * 1e-3 - sensor.lagKpa) * sensor.follows;
   let seen = sensor.lagKpa + sensor.biasKpa;
   if (sensor.noiseKpa > 0) seen += sensor.noiseKpa * nextNormal(noise);
-  seen = inSteps(seen - sensor.lowKpa, sensor.stepKpa) + sensor.lowKpa;
+  seen = Math.floor((seen - sensor.lowKpa) * sensor.stepsPerKpa + 0.5) * sensor.stepKpa + sensor.lowKpa;
   sensor.readingKpa = seen < sensor.lowKpa ? sensor.lowKpa : Math.min(seen, sensor.highKpa);
 }
 

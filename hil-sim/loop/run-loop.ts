@@ -19,6 +19,7 @@ import { type Trace, traceCapacity } from "../trace.ts";
 import { newRecorder, type Recorder, recordSample } from "./record-sample.ts";
 import { startOfRun, startPoint } from "./start-of-run.ts";
 import { newTaskSchedule, runDueTasks, type TaskSchedule } from "./task-schedule.ts";
+import { isValid, type ValidStates, validStates } from "./validity.ts";
 import { actOnPlant } from "./vehicle-side.ts";
 
 const RADIAN_PER_RPM = 0.10471975511965977;
@@ -78,7 +79,7 @@ export function runLoop(
 
 interface Run {
   readonly parameters: PlantParameters;
-  readonly validity: PlantSpec["validity"];
+  readonly valid: ValidStates;
   readonly scenario: DrawnScenario;
   readonly port: ControllerPort;
   readonly state: PlantState;
@@ -119,7 +120,7 @@ function newRun(
   const noise = normalSource(randomStream(scenario.noiseSeed, 0));
   const run: Run = {
     parameters,
-    validity: plant.validity,
+    valid: validStates(plant.validity, parameters, point.ambientPressure),
     scenario,
     port,
     state,
@@ -163,7 +164,7 @@ function advance(run: Run, millisecond: number): void {
   imposeSpeed(run, millisecond);
   heunMillisecond(run.parameters, state, input, run.plantFaults, run.memory);
   updateSensors(run.sensors, state, run.noise);
-  if (!run.leftValidity) run.leftValidity = outsideValidity(run);
+  if (!run.leftValidity) run.leftValidity = !isValid(state, run.valid);
 }
 
 function imposeSpeed(run: Run, millisecond: number): void {
@@ -219,17 +220,4 @@ function feedController(run: Run): void {
     : loopFaults.turboSpeedStuck
       ? loopFaults.turboSpeedStuckRpm
       : sensors.turboSpeed.readingRpm;
-}
-
-function outsideValidity(run: Run): boolean {
-  const { state, validity, parameters } = run;
-  return (
-    outside(state.engineSpeed, validity.engineSpeed) ||
-    outside(state.boostPressure / run.input.ambientPressure, validity.pressureRatio) ||
-    outside(state.turboSpeed * parameters.compressorRadius, validity.tipSpeed)
-  );
-}
-
-function outside(value: number, range: readonly [number, number]): boolean {
-  return !(value >= range[0] && value <= range[1]);
 }

@@ -1,11 +1,20 @@
 import type { PlantSpec } from "../../spec/plant-spec.ts";
 
 /** A plant's parameters, flat, SI; made by `plantParameters` or `copyPlantParameters` only, so that all share one shape. */
-export type PlantParameters = ReturnType<typeof plantParameters>;
+export type PlantParameters = ReturnType<typeof flatParameters>;
 export type ParameterName = keyof PlantParameters;
 
 /** Flat parameters of a plant file; symbols and plant keys: README.md. */
-export function plantParameters(spec: PlantSpec) {
+export function plantParameters(spec: PlantSpec): PlantParameters {
+  return copyPlantParameters(flatParameters(spec));
+}
+
+/** A copy that can be changed. Originals are copies too: a copy has another memory layout, and the step is compiled for one. */
+export function copyPlantParameters(source: PlantParameters): PlantParameters {
+  return { ...source };
+}
+
+function flatParameters(spec: PlantSpec) {
   const { engine, volumes, losses, compressor, intercooler, exhaust, turbine, wastegate, throttle } = spec;
   return {
     turboCount: spec.turbo.count,
@@ -87,9 +96,4 @@ export function plantParameters(spec: PlantSpec) {
     vehicleLoadQuadratic: spec.vehicle.load[1],
     vehicleInertia: spec.vehicle.inertia,
   };
-}
-
-/** A copy that can be changed; keeps the one shape that the step function is compiled for. */
-export function copyPlantParameters(source: PlantParameters): PlantParameters {
-  return { ...source };
 }
