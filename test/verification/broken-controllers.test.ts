@@ -13,7 +13,7 @@ import {
 import { summarise } from "../../verification/summarise.ts";
 import { exampleLoop, exampleText, runtimePort } from "./example-loop.ts";
 
-const RUNS = 16;
+const RUNS = 10;
 
 /** Ids of the requirements that are violated on the named scenarios within a few random runs. */
 async function violated(
