@@ -31,7 +31,8 @@ const HARMLESS: readonly string[] = ["BAD_SCALAR_START"];
 interface Work {
   readonly positions: Positions;
   readonly report: Report;
-  readonly document: Document;
+  /** Anchors seen so far, in the order of the text; looking each one up in the tree would take quadratic time. */
+  readonly anchors: Map<string, YamlNode>;
   readonly budget: { aliasNodes: number; exceeded: boolean };
   /** Where values start that YAML itself could not read. */
   readonly unread: ReadonlySet<number>;
@@ -69,7 +70,7 @@ export function parseSource(source: Source, report: Report): ParsedText | undefi
   for (const error of withoutConsequences(errors, broken[0])) report(yamlFinding(error, text, positions));
   const unread = new Set(errors.map(({ pos }) => pos[0]));
   const budget = { aliasNodes: 0, exceeded: false };
-  const root = rootOf({ positions, report, document, budget, unread }, whole, errors);
+  const root = rootOf({ positions, report, anchors: new Map(), budget, unread }, document, whole, errors);
   if (root === undefined || broken.length === 0) return root && { root };
   return { root, brokenFrom: positions.span(broken[0].pos[0], broken[0].pos[1]) };
 }
@@ -97,8 +98,13 @@ function tooLarge(length: number, at: Span, report: Report): undefined {
   return undefined;
 }
 
-function rootOf(work: Work, whole: Span, errors: readonly YAMLError[]): MapNode | undefined {
-  const { contents } = work.document;
+function rootOf(
+  work: Work,
+  document: Document,
+  whole: Span,
+  errors: readonly YAMLError[],
+): MapNode | undefined {
+  const { contents } = document;
   const root =
     contents === null ? undefined : convert(work, contents as YamlNode, { nodes: [], aliased: false });
   if (root?.kind === "map") return root;
@@ -163,6 +169,7 @@ function convert(work: Work, node: YamlNode, open: Open): Node {
   if (isAlias(node)) return convertAlias(work, node, at, open);
   if (work.unread.has(start) && isScalar(node)) return { kind: "unread", at };
   if (open.aliased) work.budget.aliasNodes += 1;
+  if (node.anchor !== undefined && !open.aliased) work.anchors.set(node.anchor, node);
   const inside = { ...open, nodes: [...open.nodes, node] };
   if (isMap(node)) return { kind: "map", entries: convertEntries(work, node.items, inside), at };
   if (isSeq(node))
@@ -174,7 +181,7 @@ function convert(work: Work, node: YamlNode, open: Open): Node {
 }
 
 function convertAlias(work: Work, alias: Alias, at: Span, open: Open): Node {
-  const target = alias.resolve(work.document);
+  const target = work.anchors.get(alias.source);
   if (target === undefined || open.nodes.includes(target))
     work.report({
       code: "unknown-alias",
