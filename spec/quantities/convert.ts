@@ -67,8 +67,14 @@ function shifted(text: string, shift: number): number {
   return Number(`${mantissa}e${Number(exponent) + shift}`);
 }
 
-/** Converts decimals as `convertExactly` does, rounded once to the nearest double; powers of ten take the short way. */
+/** Converts decimals as `convertExactly` does, rounded once to the nearest double; zero is never negative. */
 export function converter(from: Unit, to: Unit, level: LevelKind): (text: string) => number {
+  const convert = signedConverter(from, to, level);
+  return (text) => convert(text) + 0;
+}
+
+/** Powers of ten take the short way. */
+function signedConverter(from: Unit, to: Unit, level: LevelKind): (text: string) => number {
   const scales = from.scale !== undefined && level === "temperature_level";
   if (scales || level === "gauge_pressure")
     return (text) => nearestDouble(convertExactly(text, from, to, level));

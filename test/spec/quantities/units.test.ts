@@ -1,7 +1,13 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { convertQuantity, type LevelKind, sameDimension } from "../../../spec/quantities/convert.ts";
+import {
+  convertExactly,
+  convertQuantity,
+  type LevelKind,
+  sameDimension,
+} from "../../../spec/quantities/convert.ts";
 import { dimensionName } from "../../../spec/quantities/dimension-name.ts";
+import { nearestDouble } from "../../../spec/quantities/rational.ts";
 import { knownUnit, readUnit } from "../../../spec/quantities/unit-expression.ts";
 import { NAMED_UNITS } from "../../../spec/units.ts";
 
@@ -33,6 +39,15 @@ describe("conversion factors", () => {
     ["-40", "degC", 233.15],
   ])("a level of %s %s is %d K", (number, unit, kelvin) => {
     expect(convert(number, unit, "K", "temperature_level")).toBe(kelvin);
+  });
+
+  test("zero is never negative", () => {
+    for (const [from, to] of [
+      ["kPa", "kPa"],
+      ["mm2", "m2"],
+      ["psi", "Pa"],
+    ])
+      expect(Object.is(convert("-0", from, to), 0)).toBe(true);
   });
 
   test("a temperature difference has no offset", () => {
@@ -80,6 +95,23 @@ describe("the same quantity in two units gives the same double", () => {
           expect(convert(text, "%", "")).toBe(Number(`${digits}e${exponent - 2}`));
         },
       ),
+    );
+  });
+
+  test("the short way of powers of ten gives what exact arithmetic gives, for every pair of units", () => {
+    const pairs = NAMED_UNITS.flatMap((a) =>
+      NAMED_UNITS.map((b) => [knownUnit(a.name), knownUnit(b.name)] as const),
+    );
+    const sameKind = pairs.filter(
+      ([a, b]) => sameDimension(a, b) && a.scale === undefined && b.scale === undefined,
+    );
+    const text = fc.stringMatching(/^-?\d{1,12}(\.\d{1,6})?([eE][+-]?\d)?$/);
+    fc.assert(
+      fc.property(fc.constantFrom(...sameKind), text, ([from, to], number) => {
+        const exact = nearestDouble(convertExactly(number, from, to, "difference"));
+        expect(convertQuantity(number, from, to, "difference")).toBe(exact);
+      }),
+      { numRuns: 2000 },
     );
   });
 
