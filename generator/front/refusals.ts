@@ -23,6 +23,7 @@ export const REFUSALS = {
   "wrong-type": "make both sides the same type",
   "untyped-literal": "write its type: `const x: Real = 0`",
   "whole-number": "a `Count` is a whole number of 32 bits",
+  "infinite-constant": "a constant is finite in the controller's precision; use a smaller number",
   "unknown-name": "declare it, or import it from another runtime file",
   "outside-import": "the runtime imports nothing from outside itself; copy what is needed into it",
   "duplicate-name": "every function, type and constant of the runtime has a name of its own; rename one",

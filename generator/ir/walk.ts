@@ -1,4 +1,4 @@
-import type { CallExpression, Expression, Place } from "./expression.ts";
+import type { CallExpression, Expression } from "./expression.ts";
 import type { FunctionDefinition } from "./program.ts";
 import type { Statement } from "./statement.ts";
 
@@ -125,8 +125,3 @@ export const eachCallOf = (
     }
   });
 };
-
-export const samePlace = (a: Place, b: Place): boolean =>
-  a.root === b.root &&
-  a.fields.length === b.fields.length &&
-  a.fields.every((each, i) => each === b.fields[i]);

@@ -25,7 +25,7 @@ export const setAt = (object: StructObject, path: readonly string[], value: Valu
   holderOf(object, path)[path[path.length - 1]] = value;
 };
 
-export const zeroOf = (layout: Layout, { type }: Leaf): Value | number[] => {
+const zeroOf = (layout: Layout, { type }: Leaf): Value | number[] => {
   switch (type.kind) {
     case "array":
       return new Array<number>(type.size).fill(0);

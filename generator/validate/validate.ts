@@ -3,7 +3,7 @@ import { type Refusal, refusal } from "../front/refusals.ts";
 import type { CallExpression, Place } from "../ir/expression.ts";
 import type { FunctionDefinition, Program, Struct } from "../ir/program.ts";
 import type { Statement } from "../ir/statement.ts";
-import { eachCallOf, eachExpression, eachStatement, expressionsOf } from "../ir/walk.ts";
+import { eachCallOf, eachExpression, eachExpressionOf, eachStatement, expressionsOf } from "../ir/walk.ts";
 import { type Effects, effectsOf, isPure, isPureCall } from "./effects.ts";
 import { checkExchange } from "./exchange.ts";
 
@@ -124,6 +124,19 @@ const checkSizes = (structs: readonly Struct[]): readonly Refusal[] =>
       .map((field) => refusal("missing-size", field.at, `the array \`${name}.${field.name}\` has no length`)),
   );
 
+/** A constant that is infinite or not a number in this precision, written so or folded to it. */
+const checkConstants = (definition: FunctionDefinition): readonly Refusal[] => {
+  const refusals: Refusal[] = [];
+  eachExpressionOf(definition, (each) => {
+    if ((each.kind === "real" || each.kind === "constant") && !Number.isFinite(each.value)) {
+      refusals.push(
+        refusal("infinite-constant", each.origin.runtime, "the constant is not finite in this precision"),
+      );
+    }
+  });
+  return refusals;
+};
+
 /** What must hold for every target to agree and for the code to be safe; `functions` in call order. */
 export const validate = (program: Pick<Program, "functions" | "structs" | "entries">): readonly Refusal[] => {
   const effects = effectsOf(program.functions);
@@ -135,7 +148,7 @@ export const validate = (program: Pick<Program, "functions" | "structs" | "entri
       eachCallOf(definition, (call) =>
         aliases.push(...checkAliases(call, byName.get(call.function), effects)),
       );
-      return [...aliases, ...checkEffects(definition, effects)];
+      return [...aliases, ...checkEffects(definition, effects), ...checkConstants(definition)];
     }),
     ...checkExchange(program),
   ];

@@ -1,6 +1,6 @@
 /* skarn_smallest.c - the controller; every + - * / below rounds once, at float32
  * PI boost loop of the Skarn Hill test rig (invented)
- * Generated from smallest.yaml, meaning 0cdaa7a5cd81297e. Edit that file instead of this one.
+ * Generated from smallest.yaml, meaning HASH. Edit that file instead of this one.
  * Contents: 1 assumptions  2 helpers and constants  3 blocks in run order  4 init and steps
  */
 #include "skarn_smallest.h"

@@ -1,6 +1,6 @@
 /* skarn_smallest.h - the contract of the controller
  * PI boost loop of the Skarn Hill test rig (invented)
- * Generated from smallest.yaml, meaning 0cdaa7a5cd81297e. Edit that file instead of this one.
+ * Generated from smallest.yaml, meaning HASH. Edit that file instead of this one.
  * Contents: 1 types  2 calibration  3 functions
  */
 

@@ -1,6 +1,6 @@
 /* skarn24_boost.c - the controller; every + - * / below rounds once, at float32
  * Boost loop of the Skarn Hill 2.4 l hill-climb prototype (invented)
- * Generated from skarn24.yaml, meaning acddfcc9d1d05aa9. Edit that file instead of this one.
+ * Generated from skarn24.yaml, meaning HASH. Edit that file instead of this one.
  * Contents: 1 assumptions  2 helpers and constants  3 blocks in run order  4 init and steps
  */
 #include "skarn24_boost.h"
