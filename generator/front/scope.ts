@@ -1,6 +1,7 @@
 import type { ts } from "ts-morph";
 import type { Origin, ValueType } from "../ir/expression.ts";
 import type { Declarations, DeclaredType, Signature } from "./declarations.ts";
+import { isIntrinsic } from "./intrinsics.ts";
 import { type Refusal, Refused } from "./refusals.ts";
 import { spanOf } from "./source.ts";
 
@@ -28,7 +29,7 @@ export const findLocal = (scope: Scope, name: string): LocalName | undefined =>
 export const declareLocal = (scope: Scope, name: string, local: LocalName, node: ts.Node): void => {
   const taken = findLocal(scope, name) !== undefined || scope.parameters.has(name);
   scope.blocks[scope.blocks.length - 1].set(name, local);
-  if (taken || scope.declarations.constants.has(name)) {
+  if (taken || scope.declarations.constants.has(name) || isIntrinsic(name)) {
     throw new Refused("shadowed-name", spanOf(node), `\`${name}\` already means something else here`);
   }
 };

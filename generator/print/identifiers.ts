@@ -6,7 +6,7 @@ const TYPESCRIPT_KEYWORDS =
   "arguments as async await boolean case catch class const debugger declare delete enum eval export extends finally " +
   "function get global implements import in instanceof interface is keyof let module namespace never new null number " +
   "object of package private protected public readonly require set static string super symbol this throw try type " +
-  "typeof undefined unique unknown var with yield constructor prototype";
+  "typeof undefined unique unknown var with yield constructor prototype f";
 /** Functions of the C library: a static function of that name would hide one. */
 const C_LIBRARY =
   "abs labs div ldiv acos asin atan atan2 cos sin tan cosh sinh tanh exp frexp ldexp log log10 modf pow sqrt ceil fabs " +

@@ -4,6 +4,7 @@ import type { CallExpression, Place } from "../ir/expression.ts";
 import type { FunctionDefinition, Program, Struct } from "../ir/program.ts";
 import type { Statement } from "../ir/statement.ts";
 import { eachCallOf, eachExpression, eachExpressionOf, eachStatement, expressionsOf } from "../ir/walk.ts";
+import { snakeCase } from "../print/identifiers.ts";
 import { type Effects, effectsOf, isPure, isPureCall } from "./effects.ts";
 import { checkExchange } from "./exchange.ts";
 
@@ -137,12 +138,23 @@ const checkConstants = (definition: FunctionDefinition): readonly Refusal[] => {
   return refusals;
 };
 
+/** Fields that would print under one name. */
+const checkFieldNames = ({ name, fields }: Struct): readonly Refusal[] => {
+  const printed = fields.map((field) => snakeCase(field.name));
+  return fields
+    .filter((_, i) => printed.indexOf(printed[i]) !== i)
+    .map((field) =>
+      refusal("duplicate-name", field.at, `\`${name}.${field.name}\` would print like another field`),
+    );
+};
+
 /** What must hold for every target to agree and for the code to be safe; `functions` in call order. */
 export const validate = (program: Pick<Program, "functions" | "structs" | "entries">): readonly Refusal[] => {
   const effects = effectsOf(program.functions);
   const byName = new Map(program.functions.map((each) => [each.name, each]));
   return [
     ...checkSizes(program.structs),
+    ...program.structs.flatMap(checkFieldNames),
     ...program.functions.flatMap((definition) => {
       const aliases: Refusal[] = [];
       eachCallOf(definition, (call) =>

@@ -40,6 +40,7 @@ const STATEMENTS: readonly (readonly [RefusalCode, string])[] = [
   ["wrong-type", "const flag: Flag = level;"],
   ["wrong-type", "const both = input.enable && level;"],
   ["untyped-literal", "const plain = 3;"],
+  ["shadowed-name", "const clamp: Real = 1;"],
   ["infinite-constant", "output.resultKpa = 1e39;"],
   ["infinite-constant", "output.resultKpa = 1e30 * 1e30;"],
   ["infinite-constant", "output.resultKpa = 1 / 0;"],
@@ -142,6 +143,20 @@ describe("code that targets could understand differently", () => {
     );
     expect(refusals.map(({ code, message }) => [code, message])).toEqual([
       ["exchange-access", "`stepSlow` may read the exchange's `level` more than once in one step"],
+    ]);
+  });
+  test("two fields that would print under one name", () => {
+    const text = specimenText();
+    const original = text.get("specimen/specimen.ts") ?? "";
+    text.set(
+      "specimen/specimen.ts",
+      original
+        .replace("  resultKpa: Real;", "  resultKpa: Real;\n  result_kpa: Real;")
+        .replace("  output.count =", "  output.result_kpa = raw;\n  output.count ="),
+    );
+    const { refusals } = compileProgram({ runtime: text, lowered: SPECIMEN });
+    expect(refusals.map(({ code, message }) => [code, message])).toEqual([
+      ["duplicate-name", "`Output.result_kpa` would print like another field"],
     ]);
   });
   test("an array without a length", () => {
