@@ -9,9 +9,13 @@ export function plantParameters(spec: PlantSpec): PlantParameters {
   return copyPlantParameters(flatParameters(spec));
 }
 
-/** A copy that can be changed. Originals are copies too: a copy has another memory layout, and the step is compiled for one. */
+/**
+ * A copy that can be changed; all values finite. By way of JSON, which keeps every bit of a finite number and lays all
+ * fields out in the object itself, where a spread puts most behind a pointer. Originals are copies too, since the
+ * step is compiled for one layout.
+ */
 export function copyPlantParameters(source: PlantParameters): PlantParameters {
-  return { ...source };
+  return JSON.parse(JSON.stringify(source)) as PlantParameters;
 }
 
 function flatParameters(spec: PlantSpec) {

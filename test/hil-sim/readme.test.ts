@@ -16,11 +16,9 @@ function namesIn(cell: string): string[] {
 }
 
 test("the table of symbols names every parameter once and no other", () => {
-  const table = README.slice(README.indexOf("| symbol | parameter |"), README.indexOf("| symbol | state |"));
-  const rows = table
-    .split("\n")
-    .slice(2)
-    .filter((line) => line.startsWith("|"));
+  const lines = README.split("\n");
+  const heads = lines.flatMap((line, i) => (/^\| *symbol +\|/.test(line) ? [i] : []));
+  const rows = lines.slice(heads[0] + 2, heads[1]).filter((line) => line.startsWith("|"));
   const named = rows.flatMap((line) => namesIn(line.split("|")[2])).sort();
   expect(named).toEqual((Object.keys(plantParameters(engineA)) as ParameterName[]).sort());
 });
