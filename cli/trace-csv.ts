@@ -1,5 +1,5 @@
 import { MODES, type Trace } from "../hil-sim/index.ts";
-import type { TraceSignal } from "../spec/requirement-spec.ts";
+import type { TraceSignal } from "../spec/index.ts";
 
 /** Column of each signal, in the file's order; other programs read these names. */
 const COLUMNS = {
