@@ -61,6 +61,13 @@ describe.each([
   });
 });
 
+test("where the throttle node is the fastest, the bound covers it too", () => {
+  const throttleNode = { ...plantParameters(engineA), exhaustVolume: 0.02, boostVolume: 0.004 };
+  const found = fastest(throttleNode, wideOpen(1500), 1);
+  expect(found).toBeLessThanOrEqual(stiffnessBound(throttleNode) * 1.001);
+  expect(found).toBeGreaterThan(0.75 * stiffnessBound(throttleNode));
+});
+
 test("a plant of half the volumes takes two steps per millisecond, a lag of 0.2 ms four", () => {
   const a = plantParameters(engineA);
   expect(

@@ -96,6 +96,17 @@ describe("a run", () => {
     expect(summary.leftValidity).toBe(true);
   });
 
+  test("resets the controller, then lifts its ceilings if told to, and poses each new target once", () => {
+    const target = [...held(180), { at: 0.5, value: 200, over: 0 }];
+    const asked = (ceilings: boolean) => {
+      const port = fixedPort();
+      run(pull({ target, ceilings, duration: 1 }), port);
+      return port.calls.filter((call) => call !== "guard" && call !== "boost");
+    };
+    expect(asked(true)).toEqual(["reset", "target 180", "target 200"]);
+    expect(asked(false)).toEqual(["reset", "ceilings", "target 180", "target 200"]);
+  });
+
   test("refuses a trace that is too short", () => {
     expect(() => runLoop(a, pull(), plainPort(1e6), newTrace(["boost_pressure"], 1), REST)).toThrow(
       /shorter/,
@@ -124,6 +135,14 @@ describe("the vehicle side", () => {
     actOnPlant({ ...port.input, acceleratorRatio }, port.output, state, input);
     expect(input.fuel).toBe(fuel);
     expect(input.throttleCommand).toBe(acceleratorRatio);
+  });
+
+  test("cuts fuel at torque limit 0, foot on or off", () => {
+    const port = fixedPort({ torqueLimitRatio: 0 });
+    const input = newPlantInput();
+    actOnPlant({ ...port.input, acceleratorRatio: 1 }, port.output, newPlantState(), input);
+    expect(input.fuel).toBe(0);
+    expect(input.throttleCommand).toBe(0);
   });
 
   test("moves the bypass by its command", () => {
