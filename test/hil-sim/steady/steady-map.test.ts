@@ -6,6 +6,7 @@ import { newPlantFlows } from "../../../hil-sim/plant/plant-flows.ts";
 import { newPlantFaults } from "../../../hil-sim/plant/plant-input.ts";
 import { plantParameters } from "../../../hil-sim/plant/plant-parameters.ts";
 import { newPlantState } from "../../../hil-sim/plant/plant-state.ts";
+import { applyScatter, SCATTER_SETS } from "../../../hil-sim/scatter.ts";
 import { equilibriumAt } from "../../../hil-sim/steady/equilibrium.ts";
 import { openingForBoost, reachableBoost } from "../../../hil-sim/steady/opening-for-boost.ts";
 import { idlingTurbo, inputAt } from "../../../hil-sim/steady/operating-point.ts";
@@ -87,6 +88,26 @@ describe("an equilibrium", () => {
       expect(marched.boostPressure / state.boostPressure).toBeCloseTo(1, 2.5);
     },
   );
+});
+
+describe("on a scattered plant with three equilibria at one opening", () => {
+  const draws = [
+    0.27, 0.95, -0.28, 0.88, -0.08, 0.74, 0.48, -0.33, -0.19, 0.54, -0.33, -0.63, -0.85, -0.08, 0.14, -0.55,
+    0.65, -0.38, 0.06, -0.65, 0.82, 0.56, 0.51,
+  ];
+  const plant = applyScatter(b, SCATTER_SETS.default, draws);
+  const point = { ...wideOpen(2196), ambientPressure: 80e3, ambientTemperature: 262 };
+
+  test("a moved gate holds the middle one, a fixed gate leaves it both ways, as in time", () => {
+    const middle = openingForBoost(plant, point, 195e3);
+    expect(middle.kind).toBe("held");
+    const from = (factor: number) => {
+      const start = { ...middle.state, turboSpeed: middle.state.turboSpeed * factor };
+      return equilibriumAt(plant, point, middle.opening, start).state.boostPressure;
+    };
+    expect(from(1.01)).toBeGreaterThan(205e3);
+    expect(from(0.99)).toBeLessThan(185e3);
+  });
 });
 
 describe("the opening for a boost", () => {
