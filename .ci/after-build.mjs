@@ -1,5 +1,5 @@
-// What the compiler does not copy: the text of runtime/, which the generator reads, the JSON Schema, and the
-// executable bit of the command line.
+// What the compiler does not do: copy the text of runtime/, which the generator reads, and the JSON Schema; join the
+// command line into few files, since opening a hundred small ones is most of a cold start.
 import {
   chmodSync,
   cpSync,
@@ -12,6 +12,7 @@ import {
 } from "node:fs";
 import { join } from "node:path";
 import { pathToFileURL } from "node:url";
+import { build as bundle } from "esbuild";
 import { root } from "./prepare.mjs";
 
 const build = join(root, "build");
@@ -39,7 +40,32 @@ async function packRuntimeText() {
   writeFileSync(join(folder, "parsed.json"), packRuntime(new Map(texts)));
 }
 
+/** Small packages that every command loads; the others stay outside and are loaded by the command that needs them. */
+const JOINED = ["commander", "fastest-levenshtein", "picocolors", "yaml"];
+
+/** The worker's file must lie beside the code that starts it, so all goes into one flat folder. */
+async function joinFiles() {
+  const { dependencies } = JSON.parse(readFileSync(join(root, "package.json"), "utf8"));
+  await bundle({
+    entryPoints: { main: join(build, "cli/main.js"), worker: join(build, "verification/worker.js") },
+    outdir: join(build, "joined"),
+    bundle: true,
+    splitting: true,
+    format: "esm",
+    platform: "node",
+    target: "node20",
+    external: Object.keys(dependencies).filter((name) => !JOINED.includes(name)),
+    // Two of the joined packages are CommonJS and ask for node's own modules by `require`.
+    banner: {
+      js: 'import { createRequire as __cr } from "node:module"; const require = __cr(import.meta.url);',
+    },
+    logLevel: "warning",
+  });
+  writeFileSync(join(build, "cli/main.js"), '#!/usr/bin/env node\nimport "../joined/main.js";\n');
+}
+
 copyRuntimeText();
 copySchema();
 await packRuntimeText();
+await joinFiles();
 chmodSync(join(build, "cli/main.js"), 0o755);
