@@ -11,10 +11,10 @@ const toolOnPath = (name: string): string =>
     .map((folder) => join(folder, name))
     .find((path) => existsSync(path)) ?? "";
 
-/** A PATH with gcc and what it calls, and nothing else. */
+/** A PATH with gcc, what it calls and a shell, and nothing else. */
 function pathWithOnlyGcc(): string {
   const folder = scratchFolder();
-  for (const name of ["gcc", "as", "ld"]) symlinkSync(toolOnPath(name), join(folder, name));
+  for (const name of ["gcc", "as", "ld", "sh"]) symlinkSync(toolOnPath(name), join(folder, name));
   return folder;
 }
 
