@@ -1,4 +1,4 @@
-import type { Span } from "../spec/span.ts";
+import type { Span } from "../spec/index.ts";
 
 export type Precision = "float32" | "float64";
 

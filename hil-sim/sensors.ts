@@ -5,7 +5,7 @@
 // (45) temperatures: lag as (43), steps of stated size
 // limits: tau 0 follows at once; a window of w seconds and n pulses reads in steps of 60/(n w) rpm
 // source: common practice for lag and converter; counting: definition
-import type { PlantSpec, PressureSensorSpec } from "../spec/plant-spec.ts";
+import type { PlantSpec, PressureSensorSpec } from "../spec/index.ts";
 import { exponential } from "./exact-math.ts";
 import { wholeMilliseconds } from "./milliseconds.ts";
 import type { PlantState } from "./plant/plant-state.ts";

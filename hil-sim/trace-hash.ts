@@ -1,4 +1,4 @@
-import type { TraceSignal } from "../spec/requirement-spec.ts";
+import type { TraceSignal } from "../spec/index.ts";
 import type { Trace } from "./trace.ts";
 
 const OFFSET = 0x811c9dc5;

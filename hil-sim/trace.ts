@@ -1,4 +1,4 @@
-import type { TraceSignal } from "../spec/requirement-spec.ts";
+import type { TraceSignal } from "../spec/index.ts";
 import { wholeMilliseconds } from "./milliseconds.ts";
 
 /** One sample each millisecond, sample 0 at time zero; arrays are reused from run to run and may be longer than `length`. */

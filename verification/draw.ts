@@ -1,5 +1,5 @@
 import type { DrawnScenario } from "../hil-sim/index.ts";
-import type { ScenarioSpec } from "../spec/scenario-spec.ts";
+import type { ScenarioSpec } from "../spec/index.ts";
 import { type FreeValue, fixScenario, freeValues, type Reductions } from "./fix-scenario.ts";
 import { type Uniform, uniformOf } from "./random.ts";
 

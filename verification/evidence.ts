@@ -1,4 +1,4 @@
-import type { TraceSignal } from "../spec/requirement-spec.ts";
+import type { TraceSignal } from "../spec/index.ts";
 
 /**
  * The content of evidence.json: plain data, the same bytes for the same spec, version and seed on every machine.

@@ -1,5 +1,5 @@
 import { type DrawnScenario, FAULT_KINDS, type FixedCourse, type FixedFault } from "../hil-sim/index.ts";
-import type { Course, FaultSpec, Free, ScenarioSpec } from "../spec/scenario-spec.ts";
+import type { Course, FaultSpec, Free, ScenarioSpec } from "../spec/index.ts";
 
 /** A place in a scenario that takes a number: its name in counterexamples, and its range. */
 export interface FreeValue {

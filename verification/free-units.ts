@@ -1,7 +1,13 @@
-import { convertQuantity } from "../spec/quantities/convert.ts";
-import { knownUnit, readUnit } from "../spec/quantities/unit-expression.ts";
-import { absolutePressure, amount, ratioUnit, temperatureLevel } from "../spec/table/build.ts";
-import type { UnitChoice } from "../spec/table/kind.ts";
+import {
+  absolutePressure,
+  amount,
+  convertQuantity,
+  knownUnit,
+  ratioUnit,
+  readUnit,
+  temperatureLevel,
+  type UnitChoice,
+} from "../spec/index.ts";
 import type { BaseUnit } from "./fix-scenario.ts";
 
 /** How the language reads a value of each base unit. */

@@ -1,6 +1,5 @@
 import type { ControllerPort, Trace } from "../hil-sim/index.ts";
-import type { LoopSpec, TraceSignal } from "../spec/index.ts";
-import { TRACE_SIGNALS } from "../spec/index.ts";
+import { type LoopSpec, TRACE_SIGNALS, type TraceSignal } from "../spec/index.ts";
 import type { LocatedCounterexample } from "./counterexample/draw-of-counterexample.ts";
 import { requirementsOf, scenarioRunner } from "./run-scenario.ts";
 

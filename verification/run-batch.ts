@@ -1,5 +1,5 @@
 import type { ControllerPort } from "../hil-sim/index.ts";
-import type { LoopSpec } from "../spec/loop-spec.ts";
+import type { LoopSpec } from "../spec/index.ts";
 import type { Batch, BatchResult } from "./campaign.ts";
 import { type Draw, drawCorner, drawRun } from "./draw.ts";
 import { type RunDraw, requirementsOf, scenarioRunner } from "./run-scenario.ts";

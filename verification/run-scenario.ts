@@ -8,10 +8,7 @@ import {
   runLoop,
   type Trace,
 } from "../hil-sim/index.ts";
-import type { LoopSpec } from "../spec/loop-spec.ts";
-import type { PlantSpec } from "../spec/plant-spec.ts";
-import type { RequirementSpec, TraceSignal } from "../spec/requirement-spec.ts";
-import type { ScenarioSpec } from "../spec/scenario-spec.ts";
+import type { LoopSpec, PlantSpec, RequirementSpec, ScenarioSpec, TraceSignal } from "../spec/index.ts";
 import { type Draw, scenarioOf } from "./draw.ts";
 import { findCommands } from "./patterns/commands.ts";
 import { followsTarget, judge, neededSignals } from "./patterns/judge.ts";

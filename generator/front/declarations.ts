@@ -1,5 +1,5 @@
 import type { ts } from "ts-morph";
-import type { Span } from "../../spec/span.ts";
+import type { Span } from "../../spec/index.ts";
 import type { ValueType } from "../ir/expression.ts";
 import type { Enumeration } from "../ir/program.ts";
 

@@ -1,5 +1,4 @@
-import type { Diagnostic } from "../../spec/diagnostic.ts";
-import type { Span } from "../../spec/span.ts";
+import type { Diagnostic, Span } from "../../spec/index.ts";
 
 /** Why each construct is outside the language, and the way round it. The set is closed: a refusal has one of these codes. */
 export const REFUSALS = {

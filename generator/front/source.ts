@@ -1,5 +1,5 @@
 import type { ts } from "ts-morph";
-import type { Span } from "../../spec/span.ts";
+import type { Span } from "../../spec/index.ts";
 import { compiler } from "./compiler.ts";
 import { type Refusal, refusal } from "./refusals.ts";
 

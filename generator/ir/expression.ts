@@ -1,4 +1,4 @@
-import type { Span } from "../../spec/span.ts";
+import type { Span } from "../../spec/index.ts";
 import type { OperatorName } from "./operators.ts";
 
 export type ValueType =

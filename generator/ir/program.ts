@@ -1,4 +1,4 @@
-import type { Span } from "../../spec/span.ts";
+import type { Span } from "../../spec/index.ts";
 import type { CalibrationInfo, CalibrationValue, Entry, StructRole } from "../lowered.ts";
 import type { Expression, ValueType } from "./expression.ts";
 import type { Statement } from "./statement.ts";

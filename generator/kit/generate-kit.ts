@@ -1,5 +1,4 @@
-import type { LoopSpec } from "../../spec/loop-spec.ts";
-import { meaningText } from "../../spec/meaning.ts";
+import { type LoopSpec, meaningText } from "../../spec/index.ts";
 import { printC } from "../c/print-c.ts";
 import { compileProgram } from "../compile-program.ts";
 import type { Refusal } from "../front/refusals.ts";

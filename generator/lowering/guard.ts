@@ -1,4 +1,4 @@
-import type { ControllerSpec, OverspeedGuardSpec, TripSpec } from "../../spec/controller-spec.ts";
+import type { ControllerSpec, OverspeedGuardSpec, TripSpec } from "../../spec/index.ts";
 import { LIMITS, put, putDerived, putSteps, putUnused, type Sheet } from "./sheet.ts";
 
 function putLimits(sheet: Sheet, guard: OverspeedGuardSpec | undefined): void {

@@ -1,4 +1,4 @@
-import type { ControllerSpec, Coordinate, Gain } from "../../spec/controller-spec.ts";
+import type { ControllerSpec, Coordinate, Gain } from "../../spec/index.ts";
 import {
   LIMITS,
   put,

@@ -1,4 +1,4 @@
-import type { LoopSpec } from "../../spec/loop-spec.ts";
+import type { LoopSpec } from "../../spec/index.ts";
 import type { Entry, Lowered, StructRole } from "../lowered.ts";
 import { putGuard } from "./guard.ts";
 import { putActuator, putFeedback, putFeedforward, putTarget } from "./loop.ts";

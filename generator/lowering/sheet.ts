@@ -1,4 +1,4 @@
-import type { CurveSpec, Duration, Quantity, TableSpec } from "../../spec/quantity.ts";
+import type { CurveSpec, Duration, Quantity, TableSpec } from "../../spec/index.ts";
 import type { CalibrationInfo, CalibrationValue } from "../lowered.ts";
 import { stepsIn } from "./steps.ts";
 

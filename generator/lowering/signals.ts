@@ -1,5 +1,4 @@
-import type { ControllerSpec, SignalName, SignalSpec } from "../../spec/controller-spec.ts";
-import type { Duration } from "../../spec/quantity.ts";
+import type { ControllerSpec, Duration, SignalName, SignalSpec } from "../../spec/index.ts";
 import { LIMITS, type Limits, put, putDerived, putSteps, putStruct, putUnused, type Sheet } from "./sheet.ts";
 import { stepsIn } from "./steps.ts";
 

@@ -1,4 +1,4 @@
-import type { Duration } from "../../spec/quantity.ts";
+import type { Duration } from "../../spec/index.ts";
 
 /** Whole steps that cover a duration: exact division, rounded up; zero stays zero. */
 export function stepsIn(duration: Duration, step: Duration): number {

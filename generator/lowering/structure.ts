@@ -1,4 +1,4 @@
-import type { ControllerSpec, SignalName } from "../../spec/controller-spec.ts";
+import type { ControllerSpec, SignalName } from "../../spec/index.ts";
 import { stepsIn } from "./steps.ts";
 
 /** Value of every field of the runtime's `Structure`: the compile-time choices that a spec makes. */

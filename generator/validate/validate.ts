@@ -1,4 +1,4 @@
-import type { Span } from "../../spec/span.ts";
+import type { Span } from "../../spec/index.ts";
 import { type Refusal, refusal } from "../front/refusals.ts";
 import type { CallExpression, Place } from "../ir/expression.ts";
 import type { FunctionDefinition, Program, Struct } from "../ir/program.ts";

@@ -1,4 +1,4 @@
-import type { TraceSignal } from "../../spec/requirement-spec.ts";
+import type { TraceSignal } from "../../spec/index.ts";
 import type { ControllerPort } from "../controller-port.ts";
 import type { PlantFlows } from "../plant/plant-flows.ts";
 import type { PlantState } from "../plant/plant-state.ts";

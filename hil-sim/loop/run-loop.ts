@@ -1,7 +1,7 @@
 // The closed loop: plant, sensors, faults and a controller, millisecond by millisecond.
 //   at each millisecond: courses and faults, sensor values to the controller, its tasks, the vehicle side, a sample;
 //   then the plant moves on by one millisecond and the sensors take it in
-import type { PlantSpec } from "../../spec/plant-spec.ts";
+import type { PlantSpec } from "../../spec/index.ts";
 import type { ControllerPort } from "../controller-port.ts";
 import { moveCourse, type ReadyCourse, readyCourse } from "../course.ts";
 import type { DrawnScenario } from "../drawn-scenario.ts";

@@ -1,4 +1,4 @@
-import type { PlantSpec } from "../../spec/plant-spec.ts";
+import type { PlantSpec } from "../../spec/index.ts";
 import type { PlantParameters } from "../plant/plant-parameters.ts";
 import type { PlantState } from "../plant/plant-state.ts";
 

@@ -1,4 +1,4 @@
-import type { PlantSpec } from "../../spec/plant-spec.ts";
+import type { PlantSpec } from "../../spec/index.ts";
 
 /** A plant's parameters, flat, SI; made by `plantParameters` or `copyPlantParameters` only, so that all share one shape. */
 export type PlantParameters = ReturnType<typeof flatParameters>;

@@ -1,9 +1,14 @@
-import { type Compiled, compileProgram } from "../../generator/compile-program.ts";
-import { type Layout, layoutOf } from "../../generator/layout/layout.ts";
-import { javascriptOf, loadJavaScript } from "../../generator/load/load-typescript.ts";
-import type { Lowered } from "../../generator/lowered.ts";
-import { generatedModule } from "../../generator/run/controller-module.ts";
-import { printTypeScript } from "../../generator/typescript/print-typescript.ts";
+import {
+  type Compiled,
+  compileProgram,
+  generatedModule,
+  javascriptOf,
+  type Layout,
+  type Lowered,
+  layoutOf,
+  loadJavaScript,
+  printTypeScript,
+} from "../../generator/index.ts";
 import type { ControllerPort } from "../../hil-sim/index.ts";
 import type { LoopSpec } from "../../spec/index.ts";
 import { portFromModule } from "./module-port.ts";

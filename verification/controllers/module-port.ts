@@ -1,4 +1,4 @@
-import type { ControllerModule } from "../../generator/run/controller-module.ts";
+import type { ControllerModule } from "../../generator/index.ts";
 import {
   type ControllerInput,
   type ControllerOutput,

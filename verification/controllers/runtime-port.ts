@@ -1,4 +1,4 @@
-import type { Lowered } from "../../generator/lowered.ts";
+import type { Lowered } from "../../generator/index.ts";
 import type { ControllerPort } from "../../hil-sim/index.ts";
 import { type Calibration, initialise, type Structure, stepBoost, stepGuard } from "../../runtime/index.ts";
 import { copyFastOutput, copySlowOutput, newControllerInput, newControllerOutput } from "./port-values.ts";

@@ -1,4 +1,3 @@
-import type { Span } from "../../spec/index.ts";
 import {
   amount,
   bareUnit,
@@ -10,11 +9,12 @@ import {
   path,
   quantity,
   required,
+  type Span,
   sentence,
   standard,
+  type Value,
   words,
-} from "../../spec/table/build.ts";
-import type { Value } from "../../spec/table/kind.ts";
+} from "../../spec/index.ts";
 
 const LARGEST_WORD = "4294967295";
 

@@ -1,6 +1,12 @@
-import { collectFindings, type Report } from "../../spec/diagnostics/report.ts";
-import type { Diagnostic, LoopSpec, RequirementSpec, ScenarioSpec } from "../../spec/index.ts";
-import { nearestName } from "../../spec/read/suggest.ts";
+import {
+  collectFindings,
+  type Diagnostic,
+  type LoopSpec,
+  nearestName,
+  type Report,
+  type RequirementSpec,
+  type ScenarioSpec,
+} from "../../spec/index.ts";
 import type { Draw } from "../draw.ts";
 import { freeValues } from "../fix-scenario.ts";
 import { scatterNames } from "../scatter.ts";

@@ -1,8 +1,11 @@
-import { collectFindings } from "../../spec/diagnostics/report.ts";
-import type { Diagnostic, Source } from "../../spec/index.ts";
-import { readBlock } from "../../spec/read/read-block.ts";
-import type { Value } from "../../spec/table/kind.ts";
-import { parseText } from "../../spec/text/parse.ts";
+import {
+  collectFindings,
+  type Diagnostic,
+  parseText,
+  readBlock,
+  type Source,
+  type Value,
+} from "../../spec/index.ts";
 import { COUNTEREXAMPLE_FILE, type Counterexample, type ReadCounterexample } from "./counterexample.ts";
 
 export interface CounterexampleResult {

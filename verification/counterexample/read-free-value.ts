@@ -1,6 +1,4 @@
-import type { Span } from "../../spec/index.ts";
-import type { Context } from "../../spec/read/context.ts";
-import { readQuantity } from "../../spec/read/read-quantity.ts";
+import { type Context, readQuantity, type Span } from "../../spec/index.ts";
 import type { FreeValue } from "../fix-scenario.ts";
 import { UNIT_CHOICES } from "../free-units.ts";
 

@@ -1,6 +1,5 @@
 import { Document, isMap, visit } from "yaml";
-import { collectFindings } from "../../spec/diagnostics/report.ts";
-import type { LoopSpec, RequirementSpec, ScenarioSpec } from "../../spec/index.ts";
+import { collectFindings, type LoopSpec, type RequirementSpec, type ScenarioSpec } from "../../spec/index.ts";
 import type { Draw } from "../draw.ts";
 import { freeValues } from "../fix-scenario.ts";
 import { writtenExactly } from "../free-units.ts";

@@ -1,4 +1,4 @@
-import type { Trace } from "../../hil-sim/trace.ts";
+import type { Trace } from "../../hil-sim/index.ts";
 import { recorded, samplesIn } from "./recorded.ts";
 
 /** A hold of the wanted boost and the change that led to it. Positions are sample numbers. */

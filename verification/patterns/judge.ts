@@ -1,5 +1,5 @@
-import type { Trace } from "../../hil-sim/trace.ts";
-import type { Pattern, TraceSignal } from "../../spec/requirement-spec.ts";
+import type { Trace } from "../../hil-sim/index.ts";
+import type { Pattern, TraceSignal } from "../../spec/index.ts";
 import type { Command } from "./commands.ts";
 import { overshoot } from "./overshoot.ts";
 import { reacts } from "./reacts.ts";

@@ -1,4 +1,4 @@
-import type { Comparison } from "../../spec/requirement-spec.ts";
+import type { Comparison } from "../../spec/index.ts";
 
 /** The least margin a pattern gives: worse is not told apart, so that one absurd run does not hide the others. */
 export const WORST_MARGIN = -3;

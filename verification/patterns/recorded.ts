@@ -1,5 +1,5 @@
-import type { Trace } from "../../hil-sim/trace.ts";
-import type { TraceSignal } from "../../spec/requirement-spec.ts";
+import type { Trace } from "../../hil-sim/index.ts";
+import type { TraceSignal } from "../../spec/index.ts";
 
 /**
  * The samples of one signal of a trace.

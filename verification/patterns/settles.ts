@@ -1,5 +1,5 @@
-import type { Trace } from "../../hil-sim/trace.ts";
-import type { Pattern } from "../../spec/requirement-spec.ts";
+import type { Trace } from "../../hil-sim/index.ts";
+import type { Pattern } from "../../spec/index.ts";
 import type { Command } from "./commands.ts";
 import { clipped } from "./margin.ts";
 import { recorded, samplesIn } from "./recorded.ts";

@@ -1,5 +1,5 @@
-import type { Trace } from "../../hil-sim/trace.ts";
-import type { Comparison } from "../../spec/requirement-spec.ts";
+import type { Trace } from "../../hil-sim/index.ts";
+import type { Comparison } from "../../spec/index.ts";
 import { comparisonMargin, isTrue, WORST_MARGIN } from "./margin.ts";
 import { recorded } from "./recorded.ts";
 

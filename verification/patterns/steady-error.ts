@@ -1,4 +1,4 @@
-import type { Trace } from "../../hil-sim/trace.ts";
+import type { Trace } from "../../hil-sim/index.ts";
 import type { Command } from "./commands.ts";
 import { clipped } from "./margin.ts";
 import { recorded, samplesIn } from "./recorded.ts";

@@ -1,4 +1,4 @@
-import type { Free } from "../../spec/scenario-spec.ts";
+import type { Free } from "../../spec/index.ts";
 
 /** Round values of a range: `centre + k * step` for whole k from `least` to `most`; k = 0 is the simplest. */
 export interface Grid {

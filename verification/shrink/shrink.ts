@@ -1,5 +1,5 @@
 import { check, integer, property, tuple } from "fast-check";
-import type { ScenarioSpec } from "../../spec/scenario-spec.ts";
+import type { ScenarioSpec } from "../../spec/index.ts";
 import type { Draw } from "../draw.ts";
 import { freeValues } from "../fix-scenario.ts";
 import { type Grid, gridOver, gridValue, nearestOnGrid } from "./grid.ts";
