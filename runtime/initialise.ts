@@ -18,7 +18,6 @@ function initialiseRateCheck(state: RateCheckState): void {
   state.anchor = 0;
   state.age = 0;
   state.primed = false;
-  state.tooFast = false;
 }
 
 function initialiseStuckCheck(state: StuckCheckState): void {
@@ -109,6 +108,7 @@ function initialiseSlow(structure: Structure, calibration: Calibration, state: S
   initialiseMeasured(structure, state.measured);
   state.mode = "start";
   state.targetKpa = 0;
+  state.boostWanted = false;
   if (structure.integral) {
     state.integralTerm = 0;
   }
@@ -174,6 +174,7 @@ export function initialise(
     exchange.acceleratorRatio = 0;
     exchange.boostPressureKpa = 0;
     exchange.guardActive = false;
+    exchange.tripped = false;
     exchange.turboSpeedReady = false;
     exchange.turboSpeedFailed = false;
     if (structure.proportionalGuard) {

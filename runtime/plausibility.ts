@@ -1,4 +1,4 @@
-import { abs, same } from "./intrinsics.ts";
+import { abs, max, same, toReal } from "./intrinsics.ts";
 import type { Count, Flag, Real } from "./types.ts";
 
 /** Believable range of a signal and its debounce, in steps of its task. */
@@ -28,7 +28,6 @@ export interface RateCheckState {
   anchor: Real;
   age: Count;
   primed: Flag;
-  tooFast: Flag;
 }
 
 export interface StuckCheckCalibration {
@@ -48,35 +47,53 @@ export function outsideRange(calibration: SignalCalibration, raw: Real): Flag {
   return !(raw >= calibration.low && raw <= calibration.high);
 }
 
-/**
- * Changed faster than believable: compares samples one window apart, so that one quantum of a coarse sensor in one
- * step is no alarm. The verdict holds until the next comparison. Call with finite samples only.
- */
-export function movedTooFast(calibration: RateCheckCalibration, state: RateCheckState, raw: Real): Flag {
-  if (!state.primed) {
-    state.anchor = raw;
-    state.age = 0;
-    state.primed = true;
-  }
-  if (state.age < calibration.windowSteps) {
-    state.age = state.age + 1;
-  }
-  if (state.age >= calibration.windowSteps) {
-    state.tooFast = abs(raw - state.anchor) > calibration.mostChange;
-    state.anchor = raw;
-    state.age = 0;
-  }
-  return state.tooFast;
+/** Steps without a sample are counted up to here. */
+export const LONGEST_GAP_STEPS: Count = 1000000;
+
+/** Largest believable change since the anchor: one window's worth, or more when samples were missing for longer. */
+function believableChange(calibration: RateCheckCalibration, state: RateCheckState): Real {
+  return calibration.mostChange * max(toReal(state.age) / toReal(calibration.windowSteps), 1);
 }
 
-/** The same reading for long while a companion signal moved: a frozen sensor. Call with finite samples only. */
+/**
+ * Changed faster than believable since an accepted sample about one window ago, so that one quantum of a coarse sensor
+ * in one step is no alarm. A jump stays doubted, and its level is not accepted, until the signal has failed; from then
+ * on the believable change grows with time, so that a sensor that came back elsewhere can heal.
+ * `outside`: this step has no believable sample; it only counts as time gone by.
+ */
+export function movedTooFast(
+  calibration: RateCheckCalibration,
+  state: RateCheckState,
+  raw: Real,
+  outside: Flag,
+  failed: Flag,
+): Flag {
+  let tooFast: Flag = false;
+  if (!outside) {
+    tooFast = state.primed && abs(raw - state.anchor) > believableChange(calibration, state);
+    if (!tooFast && (!state.primed || state.age >= calibration.windowSteps)) {
+      state.anchor = raw;
+      state.age = 0;
+      state.primed = true;
+    }
+  }
+  if ((!tooFast || failed) && state.age < LONGEST_GAP_STEPS) {
+    state.age = state.age + 1;
+  }
+  return tooFast;
+}
+
+/**
+ * The same reading for long while a companion signal moved: a frozen sensor. Call with finite samples only. A companion
+ * that is not above zero is not known yet: no verdict until it is.
+ */
 export function standsStill(
   calibration: StuckCheckCalibration,
   state: StuckCheckState,
   raw: Real,
   companion: Real,
 ): Flag {
-  if (!same(raw, state.lastRaw)) {
+  if (!same(raw, state.lastRaw) || !(state.companionAnchor > 0)) {
     state.lastRaw = raw;
     state.companionAnchor = companion;
     state.sameSteps = 0;

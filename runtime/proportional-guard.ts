@@ -1,8 +1,9 @@
 import { highestCoordinate } from "./arbitration.ts";
 import type { Calibration } from "./calibration.ts";
-import { clamp, max, toReal } from "./intrinsics.ts";
+import { clamp, max, min, toReal } from "./intrinsics.ts";
 import type { FastState } from "./state.ts";
 import type { Structure } from "./structure.ts";
+import { filteredTurboSpeed } from "./turbo-speed.ts";
 import type { Real } from "./types.ts";
 
 /**
@@ -26,21 +27,30 @@ export function turboAcceleration(structure: Structure, state: FastState, speedR
   return acceleration;
 }
 
-/** Speed one lead time ahead, rpm, never below the speed now. */
+/**
+ * Speed one lead time ahead, rpm, never below the speed now; the speed now until there has been a good reading, so that
+ * neither filter nor history starts from a bad one.
+ */
 export function predictedSpeed(
+  structure: Structure,
   calibration: Calibration,
-  filteredRpm: Real,
-  accelerationRpmPerS: Real,
+  state: FastState,
   speedRpm: Real,
 ): Real {
-  return max(filteredRpm + calibration.guardLeadS * accelerationRpmPerS, speedRpm);
+  let predicted: Real = speedRpm;
+  if (state.turboSpeed.hasGood) {
+    const filtered = filteredTurboSpeed(structure, calibration, state);
+    const acceleration = turboAcceleration(structure, state, filtered);
+    predicted = max(filtered + calibration.guardLeadS * acceleration, speedRpm);
+  }
+  return predicted;
 }
 
 /**
  * Floor under the gate, in the feedback coordinate, within closed .. fully open.
  *   floor = base(engine speed) + g (predicted - reference) + integral;  integral += g w (speed - reference) dt
  * The base is the feedforward at a safe pressure ratio: a floor that starts from closed comes too late.
- * Own design; figures in examples/skarn24.
+ * Own design.
  */
 export function guardFloor(
   structure: Structure,
@@ -58,7 +68,10 @@ export function guardFloor(
   return clamp(base + proportional + state.guardIntegralTerm, 0, open);
 }
 
-/** Reduction of the boost target, kPa: taken at once in proportion to the predicted excess, given back slowly. */
+/**
+ * Reduction of the boost target, kPa: taken at once in proportion to the predicted excess, given back slowly; at most
+ * what leads from the ceiling down to no boost.
+ */
 export function targetReduction(
   structure: Structure,
   calibration: Calibration,
@@ -71,6 +84,7 @@ export function targetReduction(
     state.targetReductionKpa - calibration.guardTargetReleaseKpaPerS * structure.guardStepS,
     0,
   );
-  state.targetReductionKpa = clamp(wanted, released, calibration.boostCeilingKpa);
+  const most = max(calibration.boostCeilingKpa - calibration.ambientPressureOtherwiseKpa, 0);
+  state.targetReductionKpa = min(max(wanted, released), most);
   return state.targetReductionKpa;
 }

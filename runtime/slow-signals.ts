@@ -15,9 +15,14 @@ export function conditionEngineSpeed(
 ): Real {
   let suspect: Flag = outsideRange(calibration.engineSpeed, raw);
   if (structure.engineSpeedRate) {
-    if (!suspect) {
-      suspect = movedTooFast(calibration.engineSpeedRate, state.engineSpeedRate, raw);
-    }
+    const tooFast = movedTooFast(
+      calibration.engineSpeedRate,
+      state.engineSpeedRate,
+      raw,
+      suspect,
+      state.engineSpeed.failed,
+    );
+    suspect = suspect || tooFast;
   }
   debounce(calibration.engineSpeed, state.engineSpeed, raw, suspect);
   let value: Real = calibration.engineSpeedOtherwiseRpm;
@@ -39,9 +44,14 @@ export function conditionAccelerator(
 ): Real {
   let suspect: Flag = outsideRange(calibration.accelerator, raw);
   if (structure.acceleratorRate) {
-    if (!suspect) {
-      suspect = movedTooFast(calibration.acceleratorRate, state.acceleratorRate, raw);
-    }
+    const tooFast = movedTooFast(
+      calibration.acceleratorRate,
+      state.acceleratorRate,
+      raw,
+      suspect,
+      state.accelerator.failed,
+    );
+    suspect = suspect || tooFast;
   }
   debounce(calibration.accelerator, state.accelerator, raw, suspect);
   let value: Real = calibration.acceleratorOtherwiseRatio;
@@ -66,9 +76,14 @@ export function conditionBoostPressure(
 ): Real {
   let suspect: Flag = outsideRange(calibration.boostPressure, raw);
   if (structure.boostPressureRate) {
-    if (!suspect) {
-      suspect = movedTooFast(calibration.boostPressureRate, state.boostPressureRate, raw);
-    }
+    const tooFast = movedTooFast(
+      calibration.boostPressureRate,
+      state.boostPressureRate,
+      raw,
+      suspect,
+      state.boostPressure.failed,
+    );
+    suspect = suspect || tooFast;
   }
   if (structure.boostPressureStuck) {
     if (!suspect) {
@@ -97,9 +112,14 @@ export function conditionAmbientPressure(
 ): Real {
   let suspect: Flag = outsideRange(calibration.ambientPressure, raw);
   if (structure.ambientPressureRate) {
-    if (!suspect) {
-      suspect = movedTooFast(calibration.ambientPressureRate, state.ambientPressureRate, raw);
-    }
+    const tooFast = movedTooFast(
+      calibration.ambientPressureRate,
+      state.ambientPressureRate,
+      raw,
+      suspect,
+      state.ambientPressure.failed,
+    );
+    suspect = suspect || tooFast;
   }
   debounce(calibration.ambientPressure, state.ambientPressure, raw, suspect);
   let value: Real = calibration.ambientPressureOtherwiseKpa;
@@ -121,9 +141,14 @@ export function conditionChargeTemperature(
 ): Real {
   let suspect: Flag = outsideRange(calibration.chargeTemperature, raw);
   if (structure.chargeTemperatureRate) {
-    if (!suspect) {
-      suspect = movedTooFast(calibration.chargeTemperatureRate, state.chargeTemperatureRate, raw);
-    }
+    const tooFast = movedTooFast(
+      calibration.chargeTemperatureRate,
+      state.chargeTemperatureRate,
+      raw,
+      suspect,
+      state.chargeTemperature.failed,
+    );
+    suspect = suspect || tooFast;
   }
   debounce(calibration.chargeTemperature, state.chargeTemperature, raw, suspect);
   let value: Real = calibration.airReferenceTemperatureK;
@@ -150,9 +175,14 @@ export function conditionBoostCeilingRequest(
 ): Real {
   let suspect: Flag = outsideRange(calibration.boostCeilingRequest, raw);
   if (structure.boostCeilingRequestRate) {
-    if (!suspect) {
-      suspect = movedTooFast(calibration.boostCeilingRequestRate, state.boostCeilingRequestRate, raw);
-    }
+    const tooFast = movedTooFast(
+      calibration.boostCeilingRequestRate,
+      state.boostCeilingRequestRate,
+      raw,
+      suspect,
+      state.boostCeilingRequest.failed,
+    );
+    suspect = suspect || tooFast;
   }
   debounce(calibration.boostCeilingRequest, state.boostCeilingRequest, raw, suspect);
   let value: Real = calibration.boostCeilingRequestOtherwiseKpa;

@@ -40,6 +40,7 @@ export interface SlowState {
 
   mode: Mode;
   targetKpa: Real;
+  boostWanted: Flag;
   /** Integral term in the feedback coordinate, so that a changed gain causes no jump. */
   integralTerm: Real;
   previousPressureKpa: Real;

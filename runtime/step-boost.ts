@@ -6,21 +6,26 @@ import { feedforwardFor } from "./feedforward.ts";
 import { fadeIntegral, updateIntegral } from "./integral.ts";
 import { min } from "./intrinsics.ts";
 import { chooseMode, type Mode } from "./modes.ts";
+import { usable } from "./plausibility.ts";
 import type { SlowInput, SlowOutput } from "./ports.ts";
 import { rateLimit } from "./rate-limit.ts";
 import { conditionSlowSignals } from "./slow-signals.ts";
 import type { SlowState } from "./state.ts";
 import type { Structure } from "./structure.ts";
-import { boostCeiling, followTarget, requestedBoost } from "./target.ts";
+import { boostCeiling, followTarget, requestedBoost, wantsBoost } from "./target.ts";
 import type { Flag, Real } from "./types.ts";
 
-/** Opening the slow step commands: safe, at rest, or the loop's, the last two within the actuator's slew. */
+/**
+ * Opening the slow step commands: safe, at rest, or the loop's, the last two within the actuator's slew. While a trip
+ * holds the gate open it stays there, so that the release closes the gate within the slew as well.
+ */
 function commandedOpening(
   structure: Structure,
   calibration: Calibration,
   state: SlowState,
   mode: Mode,
   boostWanted: Flag,
+  tripped: Flag,
   loopOpeningRatio: Real,
 ): Real {
   let wanted: Real = loopOpeningRatio;
@@ -37,6 +42,9 @@ function commandedOpening(
   if (mode === "start" || mode === "fail_safe") {
     opening = calibration.safeOpeningRatio;
   }
+  if (tripped) {
+    opening = calibration.openingHighRatio;
+  }
   return opening;
 }
 
@@ -49,6 +57,17 @@ function report(state: SlowState, output: SlowOutput): void {
   output.acceleratorFailed = state.accelerator.failed;
   output.boostPressureFailed = state.boostPressure.failed;
   output.ambientPressureFailed = state.ambientPressure.failed;
+}
+
+/** Engine speed for the foot of the guard's floor, rpm: the highest of the table while the sensor has failed. */
+function guardEngineSpeed(structure: Structure, calibration: Calibration, state: SlowState): Real {
+  let speed: Real = state.measured.engineSpeedRpm;
+  if (structure.feedforward !== "none") {
+    if (state.engineSpeed.failed) {
+      speed = calibration.feedforward.columns[calibration.feedforward.columns.length - 1];
+    }
+  }
+  return speed;
 }
 
 /**
@@ -66,10 +85,19 @@ function commit(
     if (structure.proportionalGuard) {
       const ambient = state.measured.ambientPressureKpa;
       const safe = calibration.guardSafePressureRatio * ambient;
-      const engineSpeed = state.measured.engineSpeedRpm;
-      exchange.guardBase = feedforwardFor(structure, calibration, safe, ambient, engineSpeed);
+      exchange.guardBase = feedforwardFor(
+        structure,
+        calibration,
+        safe,
+        ambient,
+        guardEngineSpeed(structure, calibration, state),
+      );
     }
-    exchange.acceleratorRatio = state.measured.acceleratorRatio;
+    let accelerator: Real = 1;
+    if (usable(state.accelerator)) {
+      accelerator = state.measured.acceleratorRatio;
+    }
+    exchange.acceleratorRatio = accelerator;
     exchange.boostPressureKpa = state.measured.boostPressureKpa;
   }
   if (failed) {
@@ -94,11 +122,13 @@ export function stepBoost(
 ): void {
   let guardFloor: Real = 0;
   let guardActive: Flag = false;
+  let tripped: Flag = false;
   let reduction: Real = 0;
   let speedReady: Flag = true;
   let speedFailed: Flag = false;
   if (structure.overspeedGuard) {
     guardActive = exchange.guardActive;
+    tripped = exchange.tripped;
     speedReady = exchange.turboSpeedReady;
     speedFailed = exchange.turboSpeedFailed;
     if (structure.proportionalGuard) {
@@ -111,8 +141,9 @@ export function stepBoost(
   const requested = requestedBoost(structure, calibration, state.measured);
   const wanted = min(requested, boostCeiling(structure, calibration, state.measured));
   output.boostWantedKpa = wanted;
-  const target = followTarget(structure, calibration, state, wanted, reduction);
-  const boostWanted = target >= state.measured.ambientPressureKpa + calibration.leastBoostKpa;
+  const restart = tripped || state.mode === "start";
+  const target = followTarget(structure, calibration, state, wanted, reduction, restart);
+  const boostWanted = wantsBoost(calibration, state);
 
   const unlimited = sumOfTerms(structure, calibration, state, target, output);
   const loopOpening = openingFor(structure, calibration, unlimited);
@@ -120,10 +151,18 @@ export function stepBoost(
   const failed = state.boostPressure.failed || speedFailed;
   const ready = state.boostPressure.hasGood && speedReady;
   state.mode = chooseMode(failed, ready, guardActive, boostWanted);
-  state.openingRatio = commandedOpening(structure, calibration, state, state.mode, boostWanted, loopOpening);
+  state.openingRatio = commandedOpening(
+    structure,
+    calibration,
+    state,
+    state.mode,
+    boostWanted,
+    tripped,
+    loopOpening,
+  );
 
   if (structure.integral) {
-    if (boostWanted && ready && !failed) {
+    if (boostWanted && ready && !failed && !tripped) {
       updateIntegral(structure, calibration, state, unlimited, loopOpening, guardFloor, guardActive);
     } else {
       fadeIntegral(structure, calibration, state);

@@ -4,11 +4,11 @@ import type { Exchange } from "./exchange.ts";
 import { max, min } from "./intrinsics.ts";
 import { usable } from "./plausibility.ts";
 import type { FastInput, FastOutput } from "./ports.ts";
-import { guardFloor, predictedSpeed, targetReduction, turboAcceleration } from "./proportional-guard.ts";
+import { guardFloor, predictedSpeed, targetReduction } from "./proportional-guard.ts";
 import type { FastState } from "./state.ts";
 import type { Structure } from "./structure.ts";
 import { latchTrip } from "./trip.ts";
-import { filteredTurboSpeed, guardSpeed, judgeTurboSpeed, overMechanicalLimit } from "./turbo-speed.ts";
+import { guardSpeed, judgeTurboSpeed, overMechanicalLimit } from "./turbo-speed.ts";
 import type { Flag, Real } from "./types.ts";
 
 /**
@@ -42,9 +42,7 @@ export function stepGuard(
     let guardActive: Flag = false;
     if (structure.proportionalGuard) {
       const base = exchange.guardBase;
-      const filtered = filteredTurboSpeed(structure, calibration, state, speed);
-      const acceleration = turboAcceleration(structure, state, filtered);
-      const predicted = predictedSpeed(calibration, filtered, acceleration, speed);
+      const predicted = predictedSpeed(structure, calibration, state, speed);
       const floor = guardFloor(structure, calibration, state, base, predicted, speed);
       const floorOpening = openingFor(structure, calibration, floor);
       guardActive = floorOpening > wantedOpening;
@@ -65,6 +63,7 @@ export function stepGuard(
       guardActive = true;
     }
     exchange.guardActive = guardActive;
+    exchange.tripped = overLimit;
     exchange.turboSpeedReady = usable(state.turboSpeed);
     exchange.turboSpeedFailed = state.turboSpeed.failed;
     output.overLimit = overLimit;

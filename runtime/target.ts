@@ -1,10 +1,10 @@
 import type { Calibration } from "./calibration.ts";
 import { interpolateTable } from "./interpolate.ts";
-import { clamp, min } from "./intrinsics.ts";
+import { clamp, max, min } from "./intrinsics.ts";
 import { rateLimit } from "./rate-limit.ts";
 import type { Measured, SlowState } from "./state.ts";
 import type { Structure } from "./structure.ts";
-import type { Real } from "./types.ts";
+import type { Flag, Real } from "./types.ts";
 
 /**
  * Factor on the wanted pressure that holds the air mass when the charge is hot, within 1 .. 1 + at most.
@@ -60,24 +60,42 @@ export function boostCeiling(structure: Structure, calibration: Calibration, mea
   return ceiling;
 }
 
-/** The target that the loop follows, kPa abs: wanted less the guard's reduction, slewed; starts at the boost there is. */
+/**
+ * The target that the loop follows, kPa abs: wanted less the guard's reduction, but no lower than ambient by it, slewed.
+ * `restart`: begin at the boost there is, after power-on and while a trip holds the gate open.
+ */
 export function followTarget(
   structure: Structure,
   calibration: Calibration,
   state: SlowState,
   wantedKpa: Real,
   reductionKpa: Real,
+  restart: Flag,
 ): Real {
   let previous: Real = state.targetKpa;
-  if (state.mode === "start") {
+  if (restart) {
     previous = state.measured.boostPressureKpa;
   }
+  const reduced = max(wantedKpa - reductionKpa, min(wantedKpa, state.measured.ambientPressureKpa));
   state.targetKpa = rateLimit(
     previous,
-    wantedKpa - reductionKpa,
+    reduced,
     calibration.targetRiseKpaPerS,
     calibration.targetFallKpaPerS,
     structure.stepS,
   );
   return state.targetKpa;
+}
+
+/** How far the target must fall below the least boost before no boost is wanted any more, kPa. */
+export const LEAST_BOOST_HYSTERESIS_KPA: Real = 2;
+
+/** Whether the target asks for boost: ambient plus the least boost to begin, a little lower to end. */
+export function wantsBoost(calibration: Calibration, state: SlowState): Flag {
+  let threshold: Real = state.measured.ambientPressureKpa + calibration.leastBoostKpa;
+  if (state.boostWanted) {
+    threshold = threshold - min(LEAST_BOOST_HYSTERESIS_KPA, calibration.leastBoostKpa);
+  }
+  state.boostWanted = state.targetKpa >= threshold;
+  return state.boostWanted;
 }

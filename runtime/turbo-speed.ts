@@ -16,9 +16,14 @@ export function judgeTurboSpeed(
 ): void {
   let suspect: Flag = outsideRange(calibration.turboSpeed, raw);
   if (structure.turboSpeedRate) {
-    if (!suspect) {
-      suspect = movedTooFast(calibration.turboSpeedRate, state.turboSpeedRate, raw);
-    }
+    const tooFast = movedTooFast(
+      calibration.turboSpeedRate,
+      state.turboSpeedRate,
+      raw,
+      suspect,
+      state.turboSpeed.failed,
+    );
+    suspect = suspect || tooFast;
   }
   if (structure.turboSpeedStuck) {
     if (!suspect) {
@@ -29,7 +34,7 @@ export function judgeTurboSpeed(
 }
 
 /**
- * Speed the guard acts on, rpm, never lower than any finite reading: while the sensor is doubted, the last good reading
+ * Speed the guard acts on, rpm, never lower than a reading inside the believable range: while the sensor is doubted, the last good reading
  * plus the fastest plausible gain for as long as the doubt lasts, since a hidden overspeed kills.
  */
 export function guardSpeed(calibration: Calibration, state: FastState, raw: Real): Real {
@@ -49,26 +54,23 @@ export function guardSpeed(calibration: Calibration, state: FastState, raw: Real
 }
 
 /**
- * Over the mechanical limit now, whatever the other checks say: a finite reading at or above it, or a reading above
- * the believable range while the last good one was in the guard's band.
+ * Over the mechanical limit now, whatever the other checks say: a finite reading at or above it, or any reading above
+ * the believable range, infinity included, while the last good one was in the guard's band.
  */
 export function overMechanicalLimit(calibration: Calibration, state: FastState, raw: Real): Flag {
-  const finite = isFinite(raw);
   const runAway =
     raw > calibration.turboSpeed.high && state.turboSpeed.lastGood >= calibration.guardReferenceSpeedRpm;
-  return finite && (raw >= calibration.speedLimitRpm || runAway);
+  return (isFinite(raw) && raw >= calibration.speedLimitRpm) || runAway;
 }
 
-/** Speed for the prediction, rpm: filtered if the spec asks for it. */
-export function filteredTurboSpeed(
-  structure: Structure,
-  calibration: Calibration,
-  state: FastState,
-  speedRpm: Real,
-): Real {
-  let filtered: Real = speedRpm;
+/**
+ * Last good speed for the prediction, rpm, filtered if the spec asks for it. While the sensor is doubted it stands
+ * still: the assumed gain belongs to the speed now, and must not look like acceleration.
+ */
+export function filteredTurboSpeed(structure: Structure, calibration: Calibration, state: FastState): Real {
+  let filtered: Real = state.turboSpeed.lastGood;
   if (structure.turboSpeedFilter) {
-    filtered = lowPass(state.turboSpeedFilter, speedRpm, calibration.turboSpeedFilterS, structure.guardStepS);
+    filtered = lowPass(state.turboSpeedFilter, filtered, calibration.turboSpeedFilterS, structure.guardStepS);
   }
   return filtered;
 }

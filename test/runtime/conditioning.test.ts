@@ -2,7 +2,8 @@ import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import { debounce, movedTooFast, outsideRange, standsStill, usable } from "../../runtime/plausibility.ts";
 import { conditionAmbientPressure, conditionBoostPressure } from "../../runtime/slow-signals.ts";
-import { CALIBRATION, STRUCTURE, slowState } from "./fixtures.ts";
+import { judgeTurboSpeed } from "../../runtime/turbo-speed.ts";
+import { CALIBRATION, fastState, STRUCTURE, slowState } from "./fixtures.ts";
 
 const anyBits = fc.oneof(
   fc.double(),
@@ -65,15 +66,54 @@ describe("conditioning of a signal", () => {
     expect(state.goodSteps).toBe(20);
   });
 
-  test("a ramp at the stated rate is believed, a jump beyond it is not", () => {
-    const check = { mostChange: 80, windowSteps: 4 };
+  const check = { mostChange: 80, windowSteps: 4 };
+
+  test("a ramp at the stated rate is believed", () => {
     const ramp = slowState().boostPressureRate;
     for (let k = 0; k < 200; k++) {
-      expect(movedTooFast(check, ramp, 100 + k * 20)).toBe(false);
+      expect(movedTooFast(check, ramp, 100 + k * 20, false, false)).toBe(false);
     }
+  });
+
+  test("a jump is doubted in its first sample and stays doubted, however long it stands, until the signal has failed", () => {
     const jump = slowState().boostPressureRate;
-    const verdicts = [100, 100, 100, 100, 100, 200, 200, 200, 200].map((p) => movedTooFast(check, jump, p));
-    expect(verdicts.some(Boolean)).toBe(true);
+    for (let k = 0; k < 10; k++) movedTooFast(check, jump, 240, false, false);
+    for (let k = 0; k < 500; k++) expect(movedTooFast(check, jump, 120, false, false)).toBe(true);
+    expect(movedTooFast(check, jump, 238, false, false)).toBe(false);
+  });
+
+  test("after the failure a level becomes believable once the rate could have led there", () => {
+    const jump = slowState().boostPressureRate;
+    for (let k = 0; k < 10; k++) movedTooFast(check, jump, 240, false, false);
+    // 120 kPa at 20 kPa per step: believable about 6 steps after the anchor
+    const verdicts = Array.from({ length: 12 }, () => movedTooFast(check, jump, 120, false, true));
+    expect(verdicts[0]).toBe(true);
+    expect(verdicts[11]).toBe(false);
+  });
+
+  test("a gap without samples allows the change that the rate allows over the gap", () => {
+    const gap = slowState().boostPressureRate;
+    for (let k = 0; k < 10; k++) movedTooFast(check, gap, 100, false, false);
+    for (let k = 0; k < 20; k++) movedTooFast(check, gap, Number.NaN, true, false);
+    expect(movedTooFast(check, { ...gap }, 500, false, false)).toBe(false);
+    expect(movedTooFast(check, { ...gap }, 700, false, false)).toBe(true);
+  });
+
+  test("a turbo sensor that drops to zero or to half is failed after its debounce, not believed", () => {
+    for (const wrong of [0, 70000]) {
+      const state = fastState();
+      const step = (raw: number) => judgeTurboSpeed(STRUCTURE, CALIBRATION, state, raw, 200);
+      for (let k = 0; k < 100; k++) step(140000);
+      for (let k = 0; k < 31; k++) step(wrong);
+      expect(state.turboSpeed.failed).toBe(true);
+      expect(state.turboSpeed.lastGood).toBe(140000);
+    }
+  });
+
+  test("a companion that is not known yet gives no verdict", () => {
+    const state = slowState().boostPressureStuck;
+    standsStill({ steps: 5, moved: 5 }, state, 0, 0);
+    for (let k = 0; k < 50; k++) expect(standsStill({ steps: 5, moved: 5 }, state, 0, 100)).toBe(false);
   });
 
   test("a frozen reading is suspect only when the companion moved meanwhile", () => {

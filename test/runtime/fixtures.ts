@@ -134,7 +134,7 @@ const signalState = (): SignalState => ({
   suspectSteps: 0,
   goodSteps: 0,
 });
-const rateState = () => ({ anchor: 0, age: 0, primed: false, tooFast: false });
+const rateState = () => ({ anchor: 0, age: 0, primed: false });
 const stuckState = () => ({ lastRaw: 0, companionAnchor: 0, sameSteps: 0 });
 const filterState = () => ({ value: 0, primed: false });
 
@@ -170,6 +170,7 @@ export function slowState(): SlowState {
     boostCeilingRequestFilter: filterState(),
     mode: "start",
     targetKpa: 0,
+    boostWanted: false,
     integralTerm: 0,
     previousPressureKpa: 0,
     pressureRateKpaPerS: 0,
@@ -205,6 +206,7 @@ export function exchange(): Exchange {
     boostPressureKpa: 0,
     guardFloor: 0,
     guardActive: false,
+    tripped: false,
     targetReductionKpa: 0,
     turboSpeedReady: false,
     turboSpeedFailed: false,

@@ -23,6 +23,12 @@ const settle = (g: ReturnType<typeof guard>, speed: number, steps = 100) => {
   return last;
 };
 
+/** Moves the speed by at most 400 rpm per step, which the rate check believes. */
+const ramp = (g: ReturnType<typeof guard>, from: number, to: number) => {
+  const steps = Math.ceil(Math.abs(to - from) / 400);
+  for (let k = 1; k <= steps; k++) g.step(from + ((to - from) * k) / steps);
+};
+
 const anySpeed = fc.oneof(
   { weight: 4, arbitrary: fc.double({ min: 0, max: 260000, noNaN: true }) },
   {
@@ -114,8 +120,9 @@ describe("overspeed guard", () => {
 
   test("stays latched until slow for the stated time and the driver has lifted", () => {
     const g = guard();
-    settle(g, 150000);
+    settle(g, 158000);
     g.step(166000);
+    ramp(g, 158000, 140000);
     expect(settle(g, 140000, 2000).overLimit).toBe(true);
     g.shared.acceleratorRatio = 0;
     expect(g.step(140000).overLimit).toBe(false);
@@ -123,16 +130,20 @@ describe("overspeed guard", () => {
 
   test("releases without a lift once the stated time has passed", () => {
     const g = guard();
-    settle(g, 150000);
+    settle(g, 158000);
     g.step(166000);
-    expect(settle(g, 140000, 2990).overLimit).toBe(true);
-    expect(settle(g, 140000, 20).overLimit).toBe(false);
+    ramp(g, 158000, 140000);
+    expect(settle(g, 140000, 2940).overLimit).toBe(true);
+    expect(settle(g, 140000, 100).overLimit).toBe(false);
   });
 
   test("a reading above the believable range trips when the turbo was in the guard's band, and is doubted otherwise", () => {
     const high = guard();
     settle(high, 158500);
     expect(high.step(250000).overLimit).toBe(true);
+    const infinite = guard();
+    settle(infinite, 158500);
+    expect(infinite.step(Number.POSITIVE_INFINITY).overLimit).toBe(true);
     const low = guard();
     settle(low, 100000);
     const out = low.step(Number.POSITIVE_INFINITY);
@@ -153,6 +164,23 @@ describe("overspeed guard", () => {
     expect(trippedAt).toBe(18);
   });
 
+  test("a gap shorter than the debounce is no acceleration: the floor rises only by the assumed gain", () => {
+    const g = guard(0);
+    settle(g, 143000, 200);
+    for (let k = 0; k < 10; k++) g.step(Number.NaN);
+    expect(g.shared.targetReductionKpa).toBe(0);
+    const back = g.step(143000);
+    expect(back.guardFloor).toBeLessThan(250);
+    expect(back.overLimit).toBe(false);
+  });
+
+  test("a first reading that is bad starts neither filter nor history", () => {
+    const g = guard(0);
+    g.step(Number.NaN);
+    expect(settle(g, 140000, 200).overLimit).toBe(false);
+    expect(g.shared.targetReductionKpa).toBe(0);
+  });
+
   test("a silent sensor leads to fail-safe: safe opening and limited torque", () => {
     const g = guard(0);
     settle(g, 100000);
@@ -169,8 +197,9 @@ describe("overspeed guard", () => {
     settle(g, 159000, 60);
     const taken = g.shared.targetReductionKpa;
     expect(taken).toBeGreaterThanOrEqual(4 - 1e-9);
-    g.step(150000);
+    g.step(158800);
     expect(g.shared.targetReductionKpa).toBeGreaterThan(taken - 0.05);
+    ramp(g, 158800, 150000);
     settle(g, 150000, 1500);
     expect(g.shared.targetReductionKpa).toBe(0);
   });

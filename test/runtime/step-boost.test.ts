@@ -155,6 +155,52 @@ describe("slow step", () => {
     expect(l.hold(50, { chargeTemperatureK: 260 }).boostWantedKpa).toBe(150);
   });
 
+  test("after a trip the gate closes within its slew and the target starts from the boost there is", () => {
+    const l = loop();
+    l.hold(200, { boostPressureKpa: 235 });
+    l.shared.tripped = true;
+    l.shared.guardActive = true;
+    const held = l.hold(100, { boostPressureKpa: 130 });
+    expect(held.wantedOpeningRatio).toBe(1);
+    l.shared.tripped = false;
+    l.shared.guardActive = false;
+    let previous = 1;
+    const first = l.step({ boostPressureKpa: 130 });
+    expect(first.boostTargetKpa).toBeLessThanOrEqual(130 + 2 * 900 * 0.005 + 1e-9);
+    for (let k = 0; k < 50; k++) {
+      const { wantedOpeningRatio } = l.step({ boostPressureKpa: 130 });
+      expect(previous - wantedOpeningRatio).toBeLessThanOrEqual(5 * 0.005 + 1e-9);
+      previous = wantedOpeningRatio;
+    }
+  });
+
+  test("a target that hovers about the least boost does not change the mode back and forth", () => {
+    const low = { ...CALIBRATION, targetBoost: { ...CALIBRATION.targetBoost, values: [105, 105, 105, 105] } };
+    const l = loop(STRUCTURE, low);
+    l.hold(50, { ambientPressureKpa: 99 });
+    const modes = new Set(
+      Array.from({ length: 200 }, (_, k) => l.step({ ambientPressureKpa: 100 + (k % 2 ? 0.4 : -0.4) }).mode),
+    );
+    expect(modes.size).toBe(1);
+  });
+
+  test("lost signals take the safe side in the guard: highest foot of the floor, accelerator taken as pressed", () => {
+    const l = loop();
+    l.hold(50);
+    const base = l.shared.guardBase;
+    l.hold(50, { engineSpeedRpm: Number.NaN, acceleratorRatio: Number.NaN });
+    expect(l.shared.guardBase).toBeGreaterThan(base);
+    expect(l.shared.guardBase).toBeCloseTo(450, 6);
+    expect(l.shared.acceleratorRatio).toBe(1);
+  });
+
+  test("the guard never reduces the target below ambient", () => {
+    const l = loop();
+    l.hold(100);
+    l.shared.targetReductionKpa = 400;
+    expect(l.hold(400).boostTargetKpa).toBeCloseTo(100, 6);
+  });
+
   test("the guard's reduction lowers the followed target, not the wanted one", () => {
     const l = loop();
     l.hold(100);

@@ -8,7 +8,7 @@ const signal = () => ({
   suspectSteps: 0,
   goodSteps: 0,
 });
-const rateCheck = () => ({ anchor: 0, age: 0, primed: false, tooFast: false });
+const rateCheck = () => ({ anchor: 0, age: 0, primed: false });
 const stuckCheck = () => ({ lastRaw: 0, companionAnchor: 0, sameSteps: 0 });
 const lowPass = () => ({ value: 0, primed: false });
 
@@ -45,6 +45,7 @@ export function newSlowState(): SlowState {
     boostCeilingRequestFilter: lowPass(),
     mode: "start",
     targetKpa: 0,
+    boostWanted: false,
     integralTerm: 0,
     previousPressureKpa: 0,
     pressureRateKpaPerS: 0,
@@ -81,6 +82,7 @@ export function newExchange(): Exchange {
     boostPressureKpa: 0,
     guardFloor: 0,
     guardActive: false,
+    tripped: false,
     targetReductionKpa: 0,
     turboSpeedReady: false,
     turboSpeedFailed: false,
