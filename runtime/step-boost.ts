@@ -141,7 +141,7 @@ export function stepBoost(
   const requested = requestedBoost(structure, calibration, state.measured);
   const wanted = min(requested, boostCeiling(structure, calibration, state.measured));
   output.boostWantedKpa = wanted;
-  const restart = tripped || state.mode === "start";
+  const restart = tripped || state.mode === "start" || state.mode === "fail_safe";
   const target = followTarget(structure, calibration, state, wanted, reduction, restart);
   const boostWanted = wantsBoost(calibration, state);
 

@@ -62,7 +62,7 @@ export function boostCeiling(structure: Structure, calibration: Calibration, mea
 
 /**
  * The target that the loop follows, kPa abs: wanted less the guard's reduction, but no lower than ambient by it, slewed.
- * `restart`: begin at the boost there is, after power-on and while a trip holds the gate open.
+ * `restart`: begin at the boost there is, after power-on, after fail-safe and while a trip holds the gate open.
  */
 export function followTarget(
   structure: Structure,
