@@ -66,6 +66,7 @@ export const compileProgram = ({ runtime, lowered }: CompileInput): Compiled => 
     meaning: hashOf(lowered.meaning).slice(0, 16),
     precision: lowered.precision,
     cautions: lowered.cautions,
+    ...(lowered.whileRefused === undefined ? {} : { whileRefused: lowered.whileRefused }),
     entries: lowered.entries,
     ...(calibrationStruct === undefined ? {} : { calibrationStruct }),
     calibration: lowered.calibration,

@@ -17,6 +17,8 @@ export interface Entry {
   readonly kind: "init" | "step" | "check";
   /** One or two sentences for the header: when to call it. */
   readonly when: string;
+  /** Time between two calls of a step, s; the header states it. */
+  readonly periodS?: number;
 }
 
 /** A number, flag, enum member or list of numbers, or a struct of these: the shape of the runtime's `Calibration`. */
@@ -26,6 +28,17 @@ export type CalibrationValue =
   | string
   | readonly number[]
   | { readonly [field: string]: CalibrationValue };
+
+/**
+ * How a calibration number must stand to another one. State it at the later of the two, so that the other has been
+ * checked by itself.
+ */
+export interface Comparison {
+  /** `above` and `below` are strict, unless the spec's own two values are equal once rounded to the precision. */
+  readonly is: "above" | "notBelow" | "notAbove" | "below";
+  /** Path of the other number; a comparison with one that the structure never reads is left out. */
+  readonly to: string;
+}
 
 /** What is known of one calibration value; the key is its path, `gateArea.axis` or `boostPressure.low`. */
 export interface CalibrationInfo {
@@ -39,6 +52,8 @@ export interface CalibrationInfo {
   readonly high?: number;
   /** An axis: each element greater than the one before. */
   readonly increasing?: boolean;
+  /** Not for arrays. */
+  readonly comparisons?: readonly Comparison[];
 }
 
 /** A spec made ready for code: everything the passes need beside the text of the runtime. */
@@ -65,6 +80,8 @@ export interface Lowered {
   readonly calibrationInfo: Readonly<Record<string, CalibrationInfo>>;
   /** The spec's meaning as text, hashed for the banner: equal for two specs that differ in comments only. */
   readonly meaning: string;
+  /** Sentences for the header: what the caller does while the calibration check returns an index. */
+  readonly whileRefused?: string;
   /** Lines of the header's caution block. */
   readonly cautions: readonly string[];
 }

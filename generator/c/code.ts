@@ -6,6 +6,7 @@ import { hexFloat, isExactDecimal, shortestDecimal } from "../print/numbers.ts";
 import { effectsOf } from "../validate/effects.ts";
 import { cRealLiteral } from "./dialect.ts";
 import { printFunction } from "./function.ts";
+import { printPeriodGuards } from "./periods.ts";
 import { cHelpers, NEEDS_MATH } from "./spelling.ts";
 import { banner, section } from "./text.ts";
 
@@ -88,7 +89,7 @@ export const printCode = (program: Program): string => {
     "",
     "#include <float.h>",
     ...(NEEDS_MATH.some((each) => used.has(each)) ? ["#include <math.h>"] : []),
-    ...section("1 assumptions", assumptions(program)),
+    ...section("1 assumptions", [...printPeriodGuards(program, names), ...assumptions(program)]),
     ...section(
       "2 helpers and constants: comparisons, not fminf or fmaxf, so NaN and -0 act alike everywhere",
       [...constants, ...helpersFor(used, cHelpers(program.precision)).flat()],

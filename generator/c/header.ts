@@ -9,6 +9,7 @@ import { wrap } from "../print/wrap.ts";
 import { effectsOf } from "../validate/effects.ts";
 import { cType } from "./dialect.ts";
 import { signature } from "./function.ts";
+import { printPeriods, whenSentences } from "./periods.ts";
 import { cReal } from "./spelling.ts";
 import { banner, section } from "./text.ts";
 
@@ -77,11 +78,14 @@ const withRole = (program: Program, struct: Struct): Struct =>
     ? { ...struct, doc: [ROLE[struct.role], ...struct.doc] }
     : struct;
 
+const LANGUAGE_OPEN = ["", "#ifdef __cplusplus", 'extern "C" {', "#endif"];
+const LANGUAGE_CLOSE = ["", "#ifdef __cplusplus", "}", "#endif"];
+
 const printPrototypes = (program: Program, names: Names): readonly string[] => {
   const effects = effectsOf(program.functions);
   return program.entries.flatMap((entry) => [
     "",
-    ...blockComment([entry.when], ""),
+    ...blockComment([whenSentences(entry)], ""),
     ...wrap(`${signature(program, names, findFunction(program, entry.function), effects)};`),
   ]);
 };
@@ -110,12 +114,14 @@ export const printHeader = (program: Program): string => {
     "",
     "#include <stdbool.h>",
     "#include <stdint.h>",
+    ...LANGUAGE_OPEN,
     ...section("1 types", [
       ...program.enumerations.flatMap((each) => printEnumeration(names, each)),
       ...program.structs.flatMap((each) => printStruct(program, names, withRole(program, each))),
     ]),
     ...section("2 calibration", calibration),
-    ...section("3 functions", printPrototypes(program, names)),
+    ...section("3 functions", [...printPeriods(program, names), ...printPrototypes(program, names)]),
+    ...LANGUAGE_CLOSE,
     "",
     `#endif /* ${guard} */`,
   ];

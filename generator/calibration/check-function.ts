@@ -5,18 +5,22 @@ import type { Statement } from "../ir/statement.ts";
 import { eachCallOf } from "../ir/walk.ts";
 import { type Layout, layoutOf } from "../layout/layout.ts";
 import { type Leaf, leavesOf } from "../layout/leaves.ts";
-import type { CalibrationInfo, Precision } from "../lowered.ts";
+import type { CalibrationInfo, CalibrationValue, Comparison, Precision } from "../lowered.ts";
 import { CHECK_CALIBRATION } from "../print/names.ts";
 import {
   assign,
   BAD_ARRAY,
   BAD_AXIS,
   BAD_COUNT,
+  BAD_ORDER,
   BAD_REAL,
+  BAD_RISE,
   badArray,
   badAxis,
   badCount,
+  badOrder,
   badReal,
+  badRise,
   built,
   count,
   declare,
@@ -91,9 +95,46 @@ const checksOf = (
   }
 };
 
+const numberAt = (calibration: Program["calibration"], path: string): number => {
+  const value = path
+    .split(".")
+    .reduce<unknown>((at, field) => (at as Record<string, CalibrationValue>)[field], calibration);
+  return Number(value);
+};
+
+/** Strict only where the spec's own values still differ once rounded: rounding must not refuse a valid spec. */
+const isStrict = (program: Program, lower: string, upper: string): boolean => {
+  const round = rounding(program.precision);
+  return round(numberAt(program.calibration, lower)) < round(numberAt(program.calibration, upper));
+};
+
+const comparisonCheck = (
+  program: Program,
+  layout: Layout,
+  leaves: readonly Leaf[],
+  leaf: Leaf,
+  { is, to }: Comparison,
+): readonly Statement[] => {
+  const other = leaves.find(({ runtime }) => runtime.join(".") === to);
+  if (leaf.type.kind !== "real" || other?.type.kind !== "real") {
+    return [];
+  }
+  const [lower, upper] = is === "above" || is === "notBelow" ? [other, leaf] : [leaf, other];
+  const paths = [lower, upper].map(({ runtime }) => runtime.join("."));
+  const strict = (is === "above" || is === "below") && isStrict(program, paths[0], paths[1]);
+  const read = (each: Leaf): Expression => ({
+    kind: "field",
+    place: placeOf(layout, each),
+    type: REAL,
+    origin: built,
+  });
+  const value: Argument = { kind: "value", value: read(lower) };
+  return [callOn(strict ? BAD_RISE : BAD_ORDER, value, [read(upper)], leaf.index)];
+};
+
 /**
- * Adds `checkCalibration`: the index of the first calibration value that is not finite, out of its declared range, or
- * out of order on its axis; -1 when all are good. Indices count the values in the order of the struct. Counts without a
+ * Adds `checkCalibration`: the index of the first calibration value that is not finite, out of its declared range, out
+ * of order on its axis or against another value; -1 when all are good. Indices count the values in the order of the struct. Counts without a
  * declared range must lie within 0 .. 2^24.
  */
 export const addCalibrationCheck = (program: Program): Program => {
@@ -101,15 +142,20 @@ export const addCalibrationCheck = (program: Program): Program => {
   if (program.calibrationStruct === undefined) {
     return program;
   }
-  const checks = leavesOf(layout, program.calibrationStruct).flatMap((leaf) => {
+  const leaves = leavesOf(layout, program.calibrationStruct);
+  const checks = leaves.flatMap((leaf) => {
     const info = program.calibrationInfo[leaf.runtime.join(".")];
-    return checksOf(leaf, placeOf(layout, leaf), info, program.precision);
+    const own = checksOf(leaf, placeOf(layout, leaf), info, program.precision);
+    const compared = (info?.comparisons ?? []).flatMap((each) =>
+      comparisonCheck(program, layout, leaves, leaf, each),
+    );
+    return [...own, ...compared];
   });
   const check: FunctionDefinition = {
     name: CHECK_CALIBRATION,
     parameters: [{ name: ROOT, type: { kind: "struct", name: program.calibrationStruct } }],
     returns: COUNT,
-    doc: ["Looks at every calibration value: finite, within its range, axes rising."],
+    doc: ["Looks at every calibration value: finite, within its range, axes and pairs in order."],
     at: built.runtime,
     body: [declare("bad", COUNT, count(-1)), ...checks],
     result: bad,
@@ -117,7 +163,9 @@ export const addCalibrationCheck = (program: Program): Program => {
   };
   const called = new Set<string>();
   eachCallOf(check, (call) => called.add(call.function));
-  const helpers = [badReal, badCount, badArray, badAxis].filter(({ name }) => called.has(name));
+  const helpers = [badReal, badCount, badOrder, badRise, badArray, badAxis].filter(({ name }) =>
+    called.has(name),
+  );
   return {
     ...program,
     functions: [...helpers, ...program.functions, check],
@@ -126,7 +174,10 @@ export const addCalibrationCheck = (program: Program): Program => {
       {
         function: CHECK_CALIBRATION,
         kind: "check",
-        when: "Call it once after the calibration was loaded or changed. Returns the index of the first bad value, or -1; run no step unless it is -1.",
+        when: [
+          "Call it once after the calibration was loaded or changed. Returns the index of the first bad value, or -1; run no step unless it is -1.",
+          ...(program.whileRefused === undefined ? [] : [program.whileRefused]),
+        ].join(" "),
       },
     ],
   };

@@ -17,6 +17,8 @@ export const BAD_REAL = "badReal";
 export const BAD_COUNT = "badCount";
 export const BAD_ARRAY = "badArray";
 export const BAD_AXIS = "badAxis";
+export const BAD_ORDER = "badOrder";
+export const BAD_RISE = "badRise";
 
 const BUILT = { file: "generator/calibration/first-bad.ts", line: 1, column: 1, endLine: 1, endColumn: 1 };
 export const built: Origin = { runtime: BUILT };
@@ -97,29 +99,61 @@ const definition = (
   resultComments: [],
 });
 
-const single = (name: string, type: ValueType, bad: Expression): FunctionDefinition =>
+const single = (
+  name: string,
+  doc: string,
+  parameters: readonly string[],
+  type: ValueType,
+  bad: Expression,
+): FunctionDefinition =>
   definition(
     name,
-    "The index when the value is the first bad one: not a number, or outside low .. high.",
-    ["value", "low", "high"].map((each) => ({ name: each, type })),
+    doc,
+    parameters.map((each) => ({ name: each, type })),
     [],
     apply("selectCount", apply("and", isGoodYet(SO_FAR), bad), local("index", COUNT), soFar),
   );
 
+const WITHIN = "The index when the value is the first bad one: not a number, or outside low .. high.";
+const BOUNDED = ["value", "low", "high"];
+
 export const badReal = single(
   BAD_REAL,
+  WITHIN,
+  BOUNDED,
   REAL,
   outside(local("value", REAL), local("low", REAL), local("high", REAL)),
 );
 
 export const badCount = single(
   BAD_COUNT,
+  WITHIN,
+  BOUNDED,
   COUNT,
   apply(
     "or",
     apply("lessCount", local("value", COUNT), local("low", COUNT)),
     apply("greaterCount", local("value", COUNT), local("high", COUNT)),
   ),
+);
+
+const PAIR = ["lower", "upper"];
+const [lower, upper] = PAIR.map((name) => local(name, REAL));
+
+export const badOrder = single(
+  BAD_ORDER,
+  "The index when its value is the first bad one: lower is greater than upper.",
+  PAIR,
+  REAL,
+  apply("not", apply("lessEqual", lower, upper)),
+);
+
+export const badRise = single(
+  BAD_RISE,
+  "The index when its value is the first bad one: lower is not less than upper.",
+  PAIR,
+  REAL,
+  apply("not", apply("less", lower, upper)),
 );
 
 const search = (

@@ -72,6 +72,7 @@ export interface Program {
   readonly meaning: string;
   readonly precision: "float32" | "float64";
   readonly cautions: readonly string[];
+  readonly whileRefused?: string;
   readonly enumerations: readonly Enumeration[];
   /** Inner structs stand before those that hold them. */
   readonly structs: readonly Struct[];

@@ -1,5 +1,5 @@
 import type { ControllerSpec, OverspeedGuardSpec, TripSpec } from "../../spec/index.ts";
-import { LIMITS, put, putDerived, putSteps, putUnused, type Sheet } from "./sheet.ts";
+import { compare, LIMITS, put, putDerived, putSteps, putUnused, type Sheet } from "./sheet.ts";
 
 function putLimits(sheet: Sheet, guard: OverspeedGuardSpec | undefined): void {
   if (guard === undefined) {
@@ -12,6 +12,7 @@ function putLimits(sheet: Sheet, guard: OverspeedGuardSpec | undefined): void {
     written: `${limit.written} less ${margin.written}`,
     at: margin.at,
   });
+  compare(sheet, "speedCeilingRpm", "notAbove", "speedLimitRpm");
 }
 
 function putProportional(sheet: Sheet, guard: OverspeedGuardSpec | undefined, base: string): void {
@@ -57,6 +58,7 @@ function putTrip(sheet: Sheet, controller: ControllerSpec, trip: TripSpec | unde
   putSteps(sheet, "tripAfterSteps", trip.after, controller.guardStep);
   put(sheet, "tripTorqueRatio", trip.torque, "ratio", LIMITS.ratio);
   put(sheet, "tripReleaseBelowRpm", trip.releaseBelow, "rpm", LIMITS.speed);
+  compare(sheet, "tripReleaseBelowRpm", "below", "speedCeilingRpm");
   putSteps(sheet, "tripReleaseAfterSteps", trip.releaseAfter, controller.guardStep);
   put(sheet, "tripAcceleratorBelowRatio", trip.acceleratorBelow, "ratio", LIMITS.ratio);
   putSteps(sheet, "tripOrAfterSteps", trip.orAfter, controller.guardStep);

@@ -1,5 +1,6 @@
 import type { ControllerSpec, Coordinate, Gain } from "../../spec/index.ts";
 import {
+  compare,
   LIMITS,
   put,
   putCurve,
@@ -79,11 +80,11 @@ function putGain(sheet: Sheet, field: string, gain: Gain | undefined, unit: stri
     putUnused(sheet, field);
     putUnusedCurve(sheet, curveField);
   } else if (gain.kind === "number") {
-    put(sheet, field, gain.quantity, unit, LIMITS.any);
+    put(sheet, field, gain.quantity, unit, LIMITS.notNegative);
     putUnusedCurve(sheet, curveField);
   } else {
     putUnused(sheet, field);
-    putCurve(sheet, curveField, gain.curve, { axis: axisUnit, values: unit }, LIMITS.any);
+    putCurve(sheet, curveField, gain.curve, { axis: axisUnit, values: unit }, LIMITS.notNegative);
   }
 }
 
@@ -104,6 +105,7 @@ export function putFeedback(sheet: Sheet, controller: ControllerSpec): void {
   put(sheet, "setpointWeightRatio", feedback.setpointWeight, "ratio", { low: 0, high: 2 });
   put(sheet, "trimLow", feedback.trimLimits.low, base, LIMITS.any);
   put(sheet, "trimHigh", feedback.trimLimits.high, base, LIMITS.any);
+  compare(sheet, "trimHigh", "above", "trimLow");
 
   const windup = feedback.antiWindup;
   if (windup.method === "conditional") {
@@ -125,8 +127,13 @@ export function putActuator(sheet: Sheet, controller: ControllerSpec): void {
   const { actuator } = controller;
   put(sheet, "openingLowRatio", actuator.opening.low, "ratio", LIMITS.ratio);
   put(sheet, "openingHighRatio", actuator.opening.high, "ratio", LIMITS.ratio);
+  compare(sheet, "openingHighRatio", "above", "openingLowRatio");
   put(sheet, "slewOpenRatioPerS", actuator.slewOpen, "1/s", LIMITS.notNegative);
   put(sheet, "slewCloseRatioPerS", actuator.slewClose, "1/s", LIMITS.notNegative);
   put(sheet, "safeOpeningRatio", actuator.safeOpening, "ratio", LIMITS.ratio);
   put(sheet, "restOpeningRatio", actuator.restOpening, "ratio", LIMITS.ratio);
+  for (const opening of ["safeOpeningRatio", "restOpeningRatio"]) {
+    compare(sheet, opening, "notBelow", "openingLowRatio");
+    compare(sheet, opening, "notAbove", "openingHighRatio");
+  }
 }

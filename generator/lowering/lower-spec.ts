@@ -12,24 +12,30 @@ export const CAUTIONS: readonly string[] = [
   "Local rules and a qualified engineer decide whether and how this may run.",
 ];
 
-const ENTRIES: readonly Entry[] = [
+/** The structure holds both periods, but as numbers of the code; the header says them to the caller. */
+const entriesOf = ({ step, guardStep }: LoopSpec["controller"]): readonly Entry[] => [
   {
     function: "initialise",
     printed: "init",
     kind: "init",
-    when: "Call once before the first step, and to start over.",
+    when: "Call once before the first step of either task, and to start over; only while both tasks are stopped.",
   },
   {
     function: "stepBoost",
     kind: "step",
-    when: "The slow step: call it once per period; the fast step goes first when both fall together.",
+    when: "The slow step; the fast step goes first when both fall together. It must never interrupt the fast step.",
+    periodS: step.value,
   },
   {
     function: "stepGuard",
     kind: "step",
-    when: "The fast step: call it once per period; it may interrupt the slow step anywhere.",
+    when: "The fast step; it may interrupt the slow step anywhere.",
+    periodS: guardStep.value,
   },
 ];
+
+const WHILE_REFUSED =
+  "Until it is -1, hold the wastegate at its safe opening and limit engine torque as in fail-safe.";
 
 const ROLES: Readonly<Record<string, StructRole>> = {
   Calibration: "calibration",
@@ -68,12 +74,13 @@ export function lowerSpec(spec: LoopSpec, meaning: string): Lowered {
     precision: controller.precision,
     structure: { ...structure },
     structureUnits: { stepS: "s", guardStepS: "s", accelerationSteps: "fast steps" },
-    entries: ENTRIES,
+    entries: entriesOf(controller),
     roles: ROLES,
     arraySizes: { ...sheet.sizes, "FastState.speedHistoryRpm": structure.accelerationSteps },
     calibration: sheet.values,
     calibrationInfo: sheet.info,
     meaning,
+    whileRefused: WHILE_REFUSED,
     cautions: CAUTIONS,
   };
 }

@@ -1,5 +1,5 @@
 import type { CurveSpec, Duration, Quantity, TableSpec } from "../../spec/index.ts";
-import type { CalibrationInfo, CalibrationValue } from "../lowered.ts";
+import type { CalibrationInfo, CalibrationValue, Comparison } from "../lowered.ts";
 import { stepsIn } from "./steps.ts";
 
 /** Limits of a calibration value, both ends included. */
@@ -45,6 +45,12 @@ export function putDerived(
 ): void {
   sheet.values[field] = value;
   sheet.info[field] = { unit, ...limits, ...(from ? { written: from.written, at: from.at } : {}) };
+}
+
+/** The number at `path` must stand to an earlier one, `to`, as said. */
+export function compare(sheet: Sheet, path: string, is: Comparison["is"], to: string): void {
+  const info = sheet.info[path];
+  sheet.info[path] = { ...info, comparisons: [...(info.comparisons ?? []), { is, to }] };
 }
 
 /** A duration counted in steps of its task. */

@@ -1,5 +1,15 @@
 import type { ControllerSpec, Duration, SignalName, SignalSpec } from "../../spec/index.ts";
-import { LIMITS, type Limits, put, putDerived, putSteps, putStruct, putUnused, type Sheet } from "./sheet.ts";
+import {
+  compare,
+  LIMITS,
+  type Limits,
+  put,
+  putDerived,
+  putSteps,
+  putStruct,
+  putUnused,
+  type Sheet,
+} from "./sheet.ts";
 import { stepsIn } from "./steps.ts";
 
 /** How a signal appears in the runtime's calibration. */
@@ -52,8 +62,11 @@ const TURBO_SPEED: SignalPlace = {
   limits: LIMITS.speed,
 };
 
-/** Fastest believable gain of turbo speed when the spec states none, rpm/s: own choice, about 1.5 times the model's. */
-const DEFAULT_TURBO_GAIN_RPM_PER_S = 300_000;
+/**
+ * Fastest a turbo gains speed, rpm/s, for as long as its sensor is doubted: own choice, about 1.5 times the most that the
+ * model engines show. A spec's `rate_above` replaces it where it is lower; a plausibility limit is often far higher.
+ */
+const MOST_TURBO_GAIN_RPM_PER_S = 300_000;
 
 function putPlausibility(sheet: Sheet, place: SignalPlace, signal: SignalSpec, step: Duration): void {
   putStruct(sheet, place.field, (inner) => {
@@ -62,6 +75,7 @@ function putPlausibility(sheet: Sheet, place: SignalPlace, signal: SignalSpec, s
     putSteps(inner, "afterSteps", signal.fault.after, step);
     putSteps(inner, "healsAfterSteps", signal.fault.healsAfter, step);
   });
+  compare(sheet, `${place.field}.high`, "above", `${place.field}.low`);
 }
 
 /** The change a rate allows over the counted window, so that rounding the window up does not tighten the check. */
@@ -145,9 +159,9 @@ export function putSignals(sheet: Sheet, controller: ControllerSpec): void {
   putDerived(
     sheet,
     "turboSpeedGainPerStepRpm",
-    (rate?.value ?? DEFAULT_TURBO_GAIN_RPM_PER_S) * controller.guardStep.value,
+    Math.min(rate?.value ?? Number.POSITIVE_INFINITY, MOST_TURBO_GAIN_RPM_PER_S) * controller.guardStep.value,
     `rpm per step of ${controller.guardStep.written}`,
     LIMITS.speed,
-    rate,
+    rate !== undefined && rate.value < MOST_TURBO_GAIN_RPM_PER_S ? rate : undefined,
   );
 }

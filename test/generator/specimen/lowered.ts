@@ -25,8 +25,8 @@ export const SPECIMEN: Lowered = {
   structureUnits: { stepS: "s", historySteps: "steps" },
   entries: [
     { function: "start", printed: "init", kind: "init", when: "Call once before the first step." },
-    { function: "stepSlow", kind: "step", when: "Call every 10 ms." },
-    { function: "stepFast", kind: "step", when: "Call every 1 ms; it may interrupt the slow step." },
+    { function: "stepSlow", kind: "step", when: "The slow step.", periodS: 0.01 },
+    { function: "stepFast", kind: "step", when: "It may interrupt the slow step.", periodS: 0.00125 },
   ],
   roles: {
     Calibration: "calibration",
@@ -55,7 +55,14 @@ export const SPECIMEN: Lowered = {
     "curve.axis": { unit: "kPa", at: at(7), increasing: true },
     "curve.values": { unit: "kPa", at: at(8) },
     "limits.low": { unit: "kPa", written: "-20 kPa", at: at(9), low: -100, high: 0 },
-    "limits.high": { unit: "kPa", written: "300.1 kPa", at: at(10), low: 0, high: 1000 },
+    "limits.high": {
+      unit: "kPa",
+      written: "300.1 kPa",
+      at: at(10),
+      low: 0,
+      high: 1000,
+      comparisons: [{ is: "above", to: "limits.low" }],
+    },
     steps: { unit: "steps of 10 ms", written: "30 ms", at: at(11), low: 0, high: 1000 },
     armed: { unit: "", at: at(12) },
   },

@@ -9,6 +9,12 @@
 #include <math.h>
 
 /* ---- 1 assumptions ------------------------------------------------------------------------------- */
+#if (SPECIMEN_STEP_SLOW_PERIOD_US != 10000)
+#error "specimen.h was not generated together with this file: SPECIMEN_STEP_SLOW_PERIOD_US must be 10000"
+#endif
+#if (SPECIMEN_STEP_FAST_PERIOD_US != 1250)
+#error "specimen.h was not generated together with this file: SPECIMEN_STEP_FAST_PERIOD_US must be 1250"
+#endif
 #if defined(__FAST_MATH__)
 #error "build specimen without -ffast-math and with -ffp-contract=off"
 #endif
@@ -103,6 +109,12 @@ static int32_t bad_real(float value, float low, float high, int32_t index, int32
 static int32_t bad_count(int32_t value, int32_t low, int32_t high, int32_t index, int32_t so_far)
 {
     return ((so_far < 0) && ((value < low) || (value > high))) ? index : so_far;
+}
+
+/* The index when its value is the first bad one: lower is not less than upper. */
+static int32_t bad_rise(float lower, float upper, int32_t index, int32_t so_far)
+{
+    return ((so_far < 0) && !(lower < upper)) ? index : so_far;
 }
 
 /* As bad_real, for an array whose first value has the index. */
@@ -241,7 +253,7 @@ void specimen_step_fast(const specimen_state_t *state, specimen_exchange_t *exch
     exchange->level = state->history[0];
 }
 
-/* Looks at every calibration value: finite, within its range, axes rising. */
+/* Looks at every calibration value: finite, within its range, axes and pairs in order. */
 int32_t specimen_check_calibration(const specimen_calibration_t *calibration)
 {
     int32_t bad = -1;
@@ -252,6 +264,7 @@ int32_t specimen_check_calibration(const specimen_calibration_t *calibration)
         0x1.fffffep+127f /* 3.4028235e+38 */, 3, bad);
     bad = bad_real(calibration->limits.low, -100.0f, 0.0f, 6, bad);
     bad = bad_real(calibration->limits.high, 0.0f, 1000.0f, 7, bad);
+    bad = bad_rise(calibration->limits.low, calibration->limits.high, 7, bad);
     bad = bad_count(calibration->steps, 0, 1000, 8, bad);
     return bad;
 }

@@ -13,6 +13,10 @@
 #include <stdbool.h>
 #include <stdint.h>
 
+#ifdef __cplusplus
+extern "C" {
+#endif
+
 /* ---- 1 types ------------------------------------------------------------------------------------- */
 
 typedef enum {
@@ -77,19 +81,27 @@ extern const specimen_calibration_t specimen_calibration_default;
 
 /* ---- 3 functions --------------------------------------------------------------------------------- */
 
+/* Time between two calls of a step, microseconds. */
+#define SPECIMEN_STEP_SLOW_PERIOD_US (10000)
+#define SPECIMEN_STEP_FAST_PERIOD_US (1250)
+
 /* Call once before the first step. */
 void specimen_init(specimen_state_t *state, specimen_exchange_t *exchange);
 
-/* Call every 10 ms. */
+/* The slow step. Call it every 10 ms. */
 void specimen_step_slow(const specimen_calibration_t *calibration, specimen_state_t *state,
     const specimen_exchange_t *exchange, const specimen_input_t *input, specimen_output_t *output);
 
-/* Call every 1 ms; it may interrupt the slow step. */
+/* It may interrupt the slow step. Call it every 1.25 ms. */
 void specimen_step_fast(const specimen_state_t *state, specimen_exchange_t *exchange);
 
 /* Call it once after the calibration was loaded or changed. Returns the index of the first bad value, or
  * -1; run no step unless it is -1.
  */
 int32_t specimen_check_calibration(const specimen_calibration_t *calibration);
+
+#ifdef __cplusplus
+}
+#endif
 
 #endif /* SPECIMEN_H */

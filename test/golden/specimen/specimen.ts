@@ -73,6 +73,11 @@ function bad_count(value: number, low: number, high: number, index: number, so_f
     return ((so_far < 0) && ((value < low) || (value > high))) ? index : so_far;
 }
 
+/* The index when its value is the first bad one: lower is not less than upper. */
+function bad_rise(lower: number, upper: number, index: number, so_far: number): number {
+    return ((so_far < 0) && !(lower < upper)) ? index : so_far;
+}
+
 /* As bad_real, for an array whose first value has the index. */
 function bad_array(values: readonly number[], low: number, high: number, index: number,
     so_far: number): number {
@@ -198,7 +203,7 @@ export function specimen_step_fast(state: specimen_state_t, exchange: specimen_e
     exchange.level = state.history[0];
 }
 
-/* Looks at every calibration value: finite, within its range, axes rising. */
+/* Looks at every calibration value: finite, within its range, axes and pairs in order. */
 export function specimen_check_calibration(calibration: specimen_calibration_t): number {
     let bad: number = -1;
     bad = bad_array(calibration.curve_axis, -3.4028234663852886e+38 /* -3.4028235e+38 */,
@@ -208,6 +213,7 @@ export function specimen_check_calibration(calibration: specimen_calibration_t):
         3.4028234663852886e+38 /* 3.4028235e+38 */, 3, bad);
     bad = bad_real(calibration.limits.low, -100, 0, 6, bad);
     bad = bad_real(calibration.limits.high, 0, 1000, 7, bad);
+    bad = bad_rise(calibration.limits.low, calibration.limits.high, 7, bad);
     bad = bad_count(calibration.steps, 0, 1000, 8, bad);
     return bad;
 }
