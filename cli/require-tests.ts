@@ -1,4 +1,5 @@
 import type { LoopSpec, ScenarioSpec } from "../spec/index.ts";
+import { requirementsOf } from "../verification/index.ts";
 import { CommandFailure } from "./command-failure.ts";
 
 const list = (names: readonly string[]): string => (names.length > 0 ? names.join(", ") : "none");
@@ -36,9 +37,16 @@ export function selectTests(loop: LoopSpec, only: readonly string[]): LoopSpec {
   };
 }
 
-/** Ends the command unless there is something to verify. */
-export function requireTests(loop: LoopSpec): void {
+/** Ends the command unless there is something to verify: a requirement asked for by name must meet a scenario. */
+export function requireTests(loop: LoopSpec, only: readonly string[]): void {
   requirePlant(loop);
   if (loop.scenarios.length === 0) throw new CommandFailure(`${loop.file} has no scenarios to run`);
   if (loop.requirements.length === 0) throw new CommandFailure(`${loop.file} has no requirements to verify`);
+  const asked = new Set(loop.scenarios.flatMap((scenario) => requirementsOf(loop, scenario)));
+  const missed = loop.requirements.find((each) => only.includes(each.id) && !asked.has(each));
+  if (missed !== undefined) {
+    const where = `it is asked of: ${list(missed.scenarios)}`;
+    throw new CommandFailure(`\`${missed.id}\` is asked of none of the scenarios to run; ${where}`);
+  }
+  if (asked.size === 0) throw new CommandFailure(`${loop.file} asks nothing of the scenarios to run`);
 }

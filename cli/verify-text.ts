@@ -1,15 +1,31 @@
 import { basename, dirname, join, relative, resolve } from "node:path";
-import type { RequirementResult } from "../verification/index.ts";
+import { percentUp, type RequirementResult, whyNotExercised } from "../verification/index.ts";
 
 const VERDICTS = { holds: "holds", violated: "violated", not_exercised: "not exercised" } as const;
 
-/** One line of the table: verdict, requirement, scenario, random runs with the worst margin and the bound. */
+/** One line of the table: verdict, requirement, scenario, and what the runs showed. */
 export function requirementLine(result: RequirementResult): string {
-  const { id, scenario, verdict, exercised, worst, violationProbabilityUpper95 } = result;
-  const margin = worst === undefined ? "" : `, worst margin ${worst.margin.toFixed(3)}`;
-  const percent = (violationProbabilityUpper95 * 100).toPrecision(2);
-  const bound = exercised > 0 ? `, violation below ${percent} % (95 %)` : "";
-  return `${VERDICTS[verdict].padEnd(13)} ${id.padEnd(24)} ${scenario.padEnd(16)} ${exercised} runs${margin}${bound}`;
+  const { id, scenario, verdict, runs, exercised } = result;
+  const count = exercised === runs ? `${runs} runs` : `${exercised} of ${runs} runs`;
+  const shown = verdict === "not_exercised" ? silence(result) : figures(result);
+  return `${VERDICTS[verdict].padEnd(13)} ${id.padEnd(24)} ${scenario.padEnd(16)} ${count}${shown}`;
+}
+
+function figures(result: RequirementResult): string {
+  const bound = `, violation below ${percentUp(result.violationProbabilityUpper95)} % (95 %)`;
+  return `, worst margin ${worstText(result)}${result.exercised > 0 ? bound : ""}`;
+}
+
+function silence({ pattern, corners }: RequirementResult): string {
+  const inCorners = corners.exercised > 0 ? `; exercised in ${corners.exercised} corner runs only` : "";
+  return `: ${whyNotExercised(pattern)}${inCorners}`;
+}
+
+/** The least margin of random and corner runs; a corner's is named so, since it enters no count and no bound. */
+function worstText({ worst, corners }: RequirementResult): string {
+  const random = worst?.margin ?? Infinity;
+  const corner = corners.worst?.margin ?? Infinity;
+  return corner < random ? `${corner.toFixed(3)} (corner run)` : random.toFixed(3);
 }
 
 /** The command that runs a counterexample again from here. */
@@ -21,15 +37,22 @@ export function replayCommand(specPath: string, file: string): string {
 
 /** What broke, where it is written, and the command that shows it again. */
 export function violationText(result: RequirementResult, specPath: string, folder: string): string {
-  const { id, says, scenario, exercised, violations, corners, worst, at, counterexample } = result;
+  const { id, says, scenario, exercised, violations, corners, at, counterexample } = result;
   const inCorners = corners.violations > 0 ? ` and ${corners.violations} of ${corners.runs} corner runs` : "";
-  const margin = (violations > 0 ? worst : corners.worst)?.margin.toFixed(3);
   const again =
     counterexample === undefined ? [] : [`  again: ${replayCommand(specPath, join(folder, counterexample))}`];
   return [
-    `requirement \`${id}\` violated in ${violations} of ${exercised} random runs${inCorners} of \`${scenario}\`; worst margin ${margin}`,
+    `requirement \`${id}\` violated in ${violations} of ${exercised} random runs${inCorners} of \`${scenario}\`; worst margin ${worstText(result)}`,
     `  ${says}   ${at.file}:${at.line}`,
     ...again,
+  ].join("\n");
+}
+
+/** A requirement that no run exercised, in none of its scenarios among those that were run. */
+export function untestedText({ id, says, pattern, at }: RequirementResult): string {
+  return [
+    `requirement \`${id}\` not exercised in any scenario, so not tested: ${whyNotExercised(pattern)}`,
+    `  ${says}   ${at.file}:${at.line}`,
   ].join("\n");
 }
 
@@ -47,6 +70,7 @@ export function jsonRow(result: RequirementResult, folder: string) {
     violation_probability_upper_95: result.violationProbabilityUpper95,
     corner_runs: corners.runs,
     corner_violations: corners.violations,
+    corner_worst_margin: corners.worst?.margin ?? null,
     counterexample: counterexample === undefined ? null : join(folder, counterexample),
   };
 }

@@ -10,6 +10,7 @@ import {
   scatterNames,
   scenarioRunner,
   setInSpec,
+  whyNotExercised,
 } from "../../verification/index.ts";
 import { CommandFailure } from "../command-failure.ts";
 import { generatedController } from "../controller.ts";
@@ -64,12 +65,14 @@ function drawFor(scenario: ScenarioSpec, { run, seed }: ScenarioRunOptions): Dra
   return run === undefined ? drawCorner(scenario, scatter, seed, 0) : drawRun(scenario, scatter, seed, run);
 }
 
-const marginWords = (margin: number | undefined): string => {
-  if (margin === undefined) return "not exercised";
+const isViolated = (margin: number | undefined): boolean => margin !== undefined && margin < 0;
+
+const marginWords = (margin: number | undefined, pattern: string): string => {
+  if (margin === undefined) return `not exercised: ${whyNotExercised(pattern)}`;
   return `${margin < 0 ? "violated" : "holds"}, margin ${margin.toFixed(3)}`;
 };
 
-/** `simulate SPEC --scenario NAME`: one closed-loop run with the generated controller. */
+/** `simulate SPEC --scenario NAME`: one closed-loop run with the generated controller; exit 1 if it violates a requirement. */
 export async function simulateScenario(
   specPath: string,
   options: ScenarioRunOptions,
@@ -87,7 +90,7 @@ export async function simulateScenario(
   if (options.plot !== undefined)
     await writePlot(options.plot, `${loop.controller.name}: ${scenario.name}`, result.trace, loop);
   report(loop, scenario, options, result, session);
-  return EXIT.fine;
+  return result.margins.some(isViolated) ? EXIT.findings : EXIT.fine;
 }
 
 function report(
@@ -97,13 +100,25 @@ function report(
   result: JudgedRun,
   session: Session,
 ): void {
-  const margins = requirementsOf(loop, scenario).map(({ id }, i) => ({ id, margin: result.margins[i] }));
+  const margins = requirementsOf(loop, scenario).map(({ id, pattern }, i) => ({
+    id,
+    pattern: pattern.kind,
+    margin: result.margins[i],
+  }));
+  const violated = margins.filter(({ margin }) => isViolated(margin)).map(({ id }) => id);
   if (session.json) {
     const { leftValidity: left_validity, clamped } = result;
     const written = { csv: options.csv ?? null, plot: options.plot ?? null };
     const rows = margins.map(({ id, margin }) => ({ id, margin: margin ?? null }));
     session.result(
-      jsonText({ ok: true, scenario: scenario.name, margins: rows, left_validity, clamped, ...written }),
+      jsonText({
+        ok: violated.length === 0,
+        scenario: scenario.name,
+        margins: rows,
+        left_validity,
+        clamped,
+        ...written,
+      }),
     );
     return;
   }
@@ -112,7 +127,9 @@ function report(
       ? "middle of every range, nominal plant"
       : `run ${options.run}, seed ${options.seed}`;
   session.note(`${scenario.name}: ${which}`);
-  for (const { id, margin } of margins) session.note(`  ${id.padEnd(24)} ${marginWords(margin)}`);
+  for (const { id, margin, pattern } of margins)
+    session.note(`  ${id.padEnd(24)} ${marginWords(margin, pattern)}`);
+  if (violated.length > 0) session.complain(`violated in \`${scenario.name}\`: ${violated.join(", ")}`);
   if (result.leftValidity)
     session.complain("the run left the range in which the plant file calls itself valid");
   if (result.clamped) session.complain("a state was held at its bound; do not rely on this run");

@@ -4,6 +4,7 @@ import type { LoopSpec } from "../../spec/index.ts";
 import {
   evidenceText,
   loadController,
+  neverExercised,
   startWorkers,
   type Verified,
   verifyLoop,
@@ -18,7 +19,7 @@ import { openProgress } from "../progress.ts";
 import { reportContext } from "../report-context.ts";
 import { requireTests, selectTests } from "../require-tests.ts";
 import type { Session } from "../session.ts";
-import { jsonRow, requirementLine, violationText } from "../verify-text.ts";
+import { jsonRow, requirementLine, untestedText, violationText } from "../verify-text.ts";
 import { VERSION } from "../version.ts";
 
 export interface VerifyCommandOptions {
@@ -94,7 +95,7 @@ export async function verify(
   const loaded = loadLoop(specPath);
   if (loaded.value === undefined) return refuse(loaded, session, "nothing was verified");
   mention(loaded, session);
-  requireTests(selectTests(loaded.value, options.only));
+  requireTests(selectTests(loaded.value, options.only), options.only);
   const context = options.report === undefined ? undefined : reportContext(loaded.value, options.agreement);
   const begun = performance.now();
   const verified = await runCampaign(loaded.value, options, session);
@@ -117,13 +118,15 @@ function tell(
 ): ExitCode {
   const { requirements, simulations, seed } = evidence;
   const violated = requirements.filter(({ verdict }) => verdict === "violated");
-  const ok = violated.length === 0;
+  const untested = neverExercised(requirements);
+  const ok = violated.length === 0 && untested.length === 0;
   if (session.json) {
     const rows = requirements.map((result) => jsonRow(result, folder));
     session.result(jsonText({ ok, seed, simulations, seconds, requirements: rows }));
   } else {
     for (const result of requirements) session.note(requirementLine(result));
     for (const result of violated) session.complain(violationText(result, specPath, folder));
+    for (const result of untested) session.complain(untestedText(result));
     session.note(`seed ${seed}: ${simulations} simulations in ${seconds.toFixed(1)} s`);
     for (const path of written) session.note(`wrote ${path}`);
   }

@@ -1,7 +1,7 @@
-import { readdirSync, readFileSync } from "node:fs";
+import { readdirSync, readFileSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
 import { expect, test } from "vitest";
-import { runCli } from "../support/run-cli.ts";
+import { ROOT, runCli } from "../support/run-cli.ts";
 import { scratchFolder } from "../support/scratch.ts";
 import { SKARN24, SMALLEST } from "../support/smallest.ts";
 
@@ -42,12 +42,49 @@ test("--set changes the spec for this run", () => {
   expect(marginOf("--set", "controller.feedback.integral=20000 mm2/s")).not.toBe(marginOf());
 });
 
+test("a violated requirement is a finding: exit 1, named on standard error, `ok` false", () => {
+  const windsUp = ["--set", "controller.feedback.anti_windup={ method: none }"];
+  const run = simulate(...windsUp, "--quiet");
+  expect(run).toMatchObject({ code: 1, out: "" });
+  expect(run.err).toMatch(/^violated in `tip_in`: .*tip_in_overshoot/);
+  expect(simulate(...windsUp).out).toMatch(/tip_in_overshoot +violated, margin -\d/);
+  const json = simulate(...windsUp, "--json");
+  expect(json).toMatchObject({ code: 1, err: "" });
+  expect(JSON.parse(json.out).ok).toBe(false);
+  expect(JSON.parse(simulate("--json").out).ok).toBe(true);
+});
+
 test("--set is checked like the spec itself", () => {
   const wrongUnit = simulate("--set", "controller.step=5 kPa");
   expect(wrongUnit).toMatchObject({ code: 1, out: "" });
   expect(wrongUnit.err).toContain("wrong-unit");
   expect(simulate("--set", "controller.nothing.here=1")).toMatchObject({ code: 2, out: "" });
   expect(simulate("--set", "controller.step")).toMatchObject({ code: 2, out: "" });
+});
+
+test("a finding about a setting names its path and value and points at the command line", () => {
+  const settings = ["controller.feedback.integral=20000 mm2/s", "controller.overspeed_guard.trip=null"];
+  const empty = simulate(...settings.flatMap((each) => ["--set", each]));
+  expect(empty).toMatchObject({ code: 1, out: "" });
+  expect(empty.err).toContain("--set:2:1: error:");
+  expect(empty.err).toContain("controller.overspeed_guard.trip=null");
+  expect(empty.err).not.toContain("Cannot convert");
+  const unknown = simulate("--set", "controller.overspeed_guard.trip=null", "--set", "nonsense=3");
+  expect(unknown.err).toMatch(/--set:2:1: error: the file has no key `nonsense`.*\n +nonsense=3\n/);
+  expect(unknown.err).not.toContain("skarn24.yaml:");
+});
+
+test("a finding about the file keeps the line it has on disk, whatever --set adds above it", () => {
+  const folder = scratchFolder();
+  const lines = readFileSync(join(ROOT, SKARN24), "utf8").replace("plant: ./", "plannt: ./").split("\n");
+  writeFileSync(join(folder, "a.yaml"), lines.join("\n"));
+  const line = lines.findIndex((text) => text.startsWith("plannt:")) + 1;
+  const run = runCli(["simulate", "a.yaml", "--scenario", "tip_in", "--set", "controller.nonsense=[1, 2]"], {
+    cwd: folder,
+  });
+  expect(run.err).toContain(`a.yaml:${line}:1: error: `);
+  expect(run.err).toMatch(/ plannt: \.\//);
+  expect(run.err).toContain("--set:1:1: error: ");
 });
 
 test("an unknown scenario is wrong use and the known ones are named", () => {

@@ -37,7 +37,9 @@ describe("requirements that hold", () => {
 
   test("exit 0; a line per requirement and scenario, seed and number of simulations, the files", () => {
     expect(run).toMatchObject({ code: 0, err: "" });
-    expect(run.out).toMatch(/^holds +tip_in_overshoot +tip_in +6 runs, worst margin \d/m);
+    expect(run.out).toMatch(
+      /^holds +tip_in_overshoot +tip_in +6 runs, worst margin \d.*, violation below 40 % \(95 %\)$/m,
+    );
     expect(run.out).toMatch(/^seed 1: 6 simulations in /m);
     expect(run.out).toContain(`wrote ${inFolder("e.json")}\nwrote ${inFolder("r.html")}\n`);
   });
@@ -71,6 +73,7 @@ describe("requirements that hold", () => {
           violation_probability_upper_95: expect.any(Number),
           corner_runs: 20,
           corner_violations: 0,
+          corner_worst_margin: expect.any(Number),
           counterexample: null,
         },
       ],
@@ -136,9 +139,61 @@ describe("a violated requirement", () => {
   });
 });
 
+describe("a requirement that no run exercises", () => {
+  const cwd = folder;
+  const SPEC = "silent.yaml";
+
+  /** The complete example with a requirement that only a trip, and one that only a low accelerator, would exercise. */
+  beforeAll(() => {
+    const asked = (id: string, condition: string): string =>
+      `\n  - id: ${id}\n    says: Turbo speed stays bounded then.\n    scenarios: [tip_in, steps_up]\n` +
+      `    stays: { signal: turbo_speed, below: 165000 rpm, scale: 6000 rpm, while: ${condition} }\n`;
+    const added =
+      asked("after_a_trip", "{ signal: tripped, above: 0.5 }") +
+      asked("closed_pedal", "{ signal: accelerator, below: 50 % }");
+    writeFileSync(inFolder(SPEC), readFileSync(join(ROOT, SKARN24), "utf8") + added);
+    copyFileSync(join(ROOT, SKARN24_PLANT), inFolder("skarn24.plant.yaml"));
+  });
+  const verify = (...only: string[]): CliRun =>
+    runCli(["verify", SPEC, "--runs", "2", "--report", "r.html", "--only", only.join(",")], { cwd });
+
+  test("in any scenario: exit 1, with the reason on its line and in the complaint; the report counts it out", () => {
+    const run = verify("after_a_trip", "tip_in_overshoot", "tip_in", "steps_up");
+    expect(run.code).toBe(1);
+    for (const scenario of ["tip_in", "steps_up"]) {
+      const line = new RegExp(
+        `^not exercised after_a_trip +${scenario} +0 of 2 runs: its .while. was never true$`,
+        "m",
+      );
+      expect(run.out).toMatch(line);
+    }
+    expect(run.err).toMatch(
+      /^requirement `after_a_trip` not exercised in any scenario, so not tested: its `while`/,
+    );
+    expect(run.err).toMatch(/silent\.yaml:\d+\n$/);
+    expect(read("r.html")).toContain("No violation found: 1 of 2 requirements tested.");
+    const json = runCli(["verify", SPEC, "--runs", "2", "--only", "after_a_trip", "--json"], { cwd });
+    expect(json).toMatchObject({ code: 1, err: "" });
+    const { ok, requirements } = JSON.parse(json.out);
+    expect(ok).toBe(false);
+    expect(requirements[0]).toMatchObject({ verdict: "not_exercised", exercised: 0, worst_margin: null });
+  });
+
+  test("in some scenario only: exit 0, and the line of the silent one says so", () => {
+    const run = verify("closed_pedal", "tip_in", "steps_up");
+    expect(run).toMatchObject({ code: 0, err: "" });
+    expect(run.out).toMatch(
+      /^not exercised closed_pedal +steps_up +0 of 2 runs: its `while` was never true$/m,
+    );
+    expect(run.out).toMatch(/^holds +closed_pedal +tip_in +2 runs, worst margin/m);
+    expect(read("r.html")).toContain("No violation found: 1 requirement tested.");
+  });
+});
+
 describe("wrong use", () => {
   test.each([
     [["--only", "nothing"], "no requirement or scenario `nothing`"],
+    [["--only", "tip_in,step_overshoot"], "`step_overshoot` is asked of none of the scenarios to run"],
     [["--runs", "0"], "whole number from 1"],
     [["--jobs", "none"], "whole number from 1"],
     [["--agreement", "none.json", "--report", "x.html"], "cannot read none.json"],

@@ -1,6 +1,9 @@
 import type { Comparison } from "../../spec/index.ts";
 
-/** The least margin a pattern gives: worse is not told apart, so that one absurd run does not hide the others. */
+/**
+ * The least margin of the target patterns: worse is not told apart, so that one absurd run does not hide the others.
+ * Also what a margin that is not a number becomes. `stays` and `reacts`, distances in units of `scale`, have no least.
+ */
 export const WORST_MARGIN = -3;
 
 /** At least WORST_MARGIN; NaN, which no requirement may be satisfied by, becomes WORST_MARGIN. */

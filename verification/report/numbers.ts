@@ -1,3 +1,5 @@
+import { percentUp as percentDigits } from "../percent-up.ts";
+
 const NARROW_SPACE = "\u202F";
 
 /** Words for what is no number; undefined for a number. `null` is what JSON makes of NaN and Infinity. */
@@ -49,16 +51,7 @@ export function margin(value: number): string {
 export function percentUp(probability: number): string {
   const word = wordFor(probability);
   if (word !== undefined) return word;
-  const percent = probability * 100;
-  if (percent <= 0) return `0${NARROW_SPACE}%`;
-  const unit = 10 ** (Math.floor(Math.log10(percent)) - 1);
-  const up = Math.ceil(percent / unit - 1e-9) * unit;
-  return `${up >= 99.5 ? "100" : plainDecimals(up, unit)}${NARROW_SPACE}%`;
-}
-
-/** As many decimals as the unit has: two significant digits, the trailing zero kept. */
-function plainDecimals(value: number, unit: number): string {
-  return value.toFixed(Math.max(0, Math.round(-Math.log10(unit))));
+  return `${percentDigits(probability)}${NARROW_SPACE}%`;
 }
 
 /** Fixed decimals for table columns; words for NaN and infinities. */

@@ -47,7 +47,7 @@ const PARTS = `
 .verdict.violated{background:var(--ink);color:var(--paper);--knock:var(--ink)}
 .verdict.holds{border-color:var(--rule)}
 .verdict.not_exercised{border:1px dashed var(--soft)}
-.violations li{margin-bottom:.4rem}
+.violations li,.untested li{margin-bottom:.4rem}
 .box{overflow-x:auto;margin:.5rem 0 .9rem;scrollbar-width:thin;position:relative}
 .caption+.box{margin-top:.15rem}
 table{overflow-wrap:break-word;border-collapse:collapse;font-size:.88rem;line-height:1.35;font-variant-numeric:tabular-nums}

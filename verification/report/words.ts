@@ -1,4 +1,5 @@
 import type { Evidence, RequirementResult, Verdict } from "../evidence.ts";
+import { neverExercised, whyNotExercised } from "../not-exercised.ts";
 import { type Html, html, trusted } from "./html.ts";
 import { percentUp, whole } from "./numbers.ts";
 
@@ -27,11 +28,13 @@ export function verdictMark(verdict: Verdict): Html {
   return html`<span class="verdict ${verdict}">${verdictShape(verdict)} ${word}</span>`;
 }
 
-/** The worst over all requirements; a report without any requirement shows nothing. */
+/** The worst over all requirements: one that no run exercised keeps the whole from holding. */
 export function overallVerdict(evidence: Evidence): Verdict {
   const verdicts = new Set(evidence.requirements.map(({ verdict }) => verdict));
   if (verdicts.has("violated")) return "violated";
-  return verdicts.has("holds") ? "holds" : "not_exercised";
+  return verdicts.has("holds") && neverExercised(evidence.requirements).length === 0
+    ? "holds"
+    : "not_exercised";
 }
 
 export function plural(count: number, one: string, many = `${one}s`): string {
@@ -43,14 +46,13 @@ export function sentence(text: string): string {
   return /[.!?]\s*$/.test(text) ? text : `${text}.`;
 }
 
-export function count(evidence: Evidence, verdict: Verdict): number {
-  return evidence.requirements.filter((result) => result.verdict === verdict).length;
-}
-
 /** One sentence: what was done and what came of it. Never more than the kind of evidence carries. */
 export function testedSentence(result: RequirementResult): string {
   if (result.exercised === 0) {
-    return `Tested in ${plural(result.runs, "independent random run")}; none of them exercised it, so nothing is known.`;
+    return (
+      `Not tested: none of ${plural(result.runs, "independent random run")} exercised it, so they show nothing: ` +
+      `${whyNotExercised(result.pattern)}.`
+    );
   }
   const found = result.violations === 0 ? "no violation" : plural(result.violations, "violation");
   const bound = percentUp(result.violationProbabilityUpper95);

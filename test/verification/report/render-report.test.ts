@@ -57,7 +57,8 @@ describe("the report", () => {
       "Seed 20240611, 1000 runs per scenario, spoolwright 0.1.0",
     );
     expect(words(document, "main > :first-child .headline")).toBe(
-      "1 of 4 requirements violated. Not exercised by any run: 1 of 4 pairs of requirement and scenario.",
+      "1 of 4 requirements violated. Exercised in no scenario, so not tested: 1 requirement. " +
+        "Not exercised by any run: 1 of 4 pairs of requirement and scenario.",
     );
   });
 
@@ -80,7 +81,7 @@ describe("the report", () => {
     expect(rows[2]).toContain("overshoot_small on tip_in");
     expect(rows[2]).toMatch(/holds tested 0\.181 998 of 1000 0 0\.30 % 0 of 64 0\.092 214$/);
     expect(rows[0]).toMatch(/violated tested \u22120\.032 998 of 1000 3 0\.78 % 0 of 64 0\.092 214$/);
-    expect(rows[1]).toMatch(/not exercised tested \u2013 0 of 1000 0 \u2013 0 of 64 0\.092 214$/);
+    expect(rows[1]).toMatch(/not exercised \u2013 \u2013 0 of 1000 0 \u2013 0 of 64 0\.092 214$/);
     const detail = words(document, "#requirement-1");
     expect(detail).toContain("engine_speed 5931.25 rpm");
     expect(detail).toContain("with a probability below 0.30 %");
@@ -209,6 +210,34 @@ describe("the report", () => {
     }
   });
 
+  test("counts as tested only what some scenario exercised, and names the rest with the reason", () => {
+    const {
+      worst: _worst,
+      margins: _margins,
+      ...silent
+    } = sampleResult({ verdict: "not_exercised", exercised: 0 });
+    const corners = NO_CORNERS;
+    const requirements = [
+      sampleResult(),
+      sampleResult({ id: "partial" }),
+      { ...silent, id: "partial", scenario: "boost_sensor_stuck" },
+      { ...silent, id: "never", pattern: "stays", corners },
+      { ...silent, id: "never", pattern: "stays", corners, scenario: "boost_sensor_stuck" },
+    ];
+    const document = read(renderReport(sampleEvidence({ requirements })));
+    expect(words(document, ".headline.not_exercised")).toBe(
+      "No violation found: 2 of 3 requirements tested. Exercised in no scenario, so not tested: 1 requirement. " +
+        "Not exercised by any run: 3 of 5 pairs of requirement and scenario.",
+    );
+    expect(document.querySelectorAll(".untested li").length).toBe(1);
+    expect(words(document, ".untested li")).toMatch(
+      /^never was exercised in no scenario: .*`while` was never true/,
+    );
+    expect(words(document, "table.requirements")).toContain(
+      "not exercised \u2013 \u2013 0 of 1000 0 \u2013 0 of 0",
+    );
+  });
+
   test("says that nothing was tested when the evidence is empty", () => {
     const { compressorMap: _map, codeFigures: _figures, ...rest } = sampleEvidence();
     const empty: Evidence = {
@@ -234,6 +263,8 @@ describe("the report", () => {
     } = sampleResult({ verdict: "not_exercised", exercised: 0 });
     const document = read(renderReport(sampleEvidence({ requirements: [bare] })));
     expect(words(document, ".headline")).toBe("No requirement was exercised by any run; nothing is known.");
-    expect(words(document, "#requirement-1")).toContain("none of them exercised it, so nothing is known");
+    expect(words(document, "#requirement-1")).toContain(
+      "none of 1000 independent random runs exercised it, so they show nothing",
+    );
   });
 });

@@ -23,7 +23,7 @@ function row({ result, index }: Placed, specFile: string): Html {
 <th scope="row"><a href="#${slug("requirement", index)}">${name(result.id)}</a> <span class="on">on ${name(result.scenario)}</span>
 <small>${name(result.says)}</small></th>
 <td class="words">${verdictMark(result.verdict)}</td>
-<td class="words">${result.kind}</td>
+<td class="words">${result.verdict === "not_exercised" ? NONE : result.kind}</td>
 <td>${worstMargin(result.worst)}</td>
 <td>${whole(result.exercised)} of ${whole(result.runs)}</td>
 <td>${whole(result.violations)}</td>

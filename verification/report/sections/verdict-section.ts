@@ -1,27 +1,42 @@
 import type { Evidence, RequirementResult, WorstRun } from "../../evidence.ts";
+import { neverExercised, whyNotExercised } from "../../not-exercised.ts";
 import { byVerdict, type Placed } from "../by-verdict.ts";
 import { type Html, html, name } from "../html.ts";
 import { margin } from "../numbers.ts";
 import { replayCommand } from "../replay-command.ts";
 import { slug } from "../slug.ts";
-import { count, overallVerdict, plural, sentence, verdictShape } from "../words.ts";
+import { overallVerdict, plural, sentence, verdictShape } from "../words.ts";
 
 /** A requirement is listed once for each of its scenarios. */
 function countOfIds(results: readonly RequirementResult[]): number {
   return new Set(results.map(({ id }) => id)).size;
 }
 
-function headline(evidence: Evidence): string {
-  const pairs = evidence.requirements.length;
+function headline({ requirements }: Evidence): string {
+  const pairs = requirements.length;
   if (pairs === 0) return "Nothing was tested: the evidence holds no requirement.";
-  const all = countOfIds(evidence.requirements);
-  const violated = countOfIds(evidence.requirements.filter(({ verdict }) => verdict === "violated"));
-  const silent = count(evidence, "not_exercised");
-  const rest =
-    silent === 0 ? "" : ` Not exercised by any run: ${silent} of ${pairs} pairs of requirement and scenario.`;
+  const all = countOfIds(requirements);
+  const violated = countOfIds(requirements.filter(({ verdict }) => verdict === "violated"));
+  const tested = all - neverExercised(requirements).length;
+  if (tested === 0) return "No requirement was exercised by any run; nothing is known.";
+  const rest = silentWords(requirements, all - tested);
   if (violated > 0) return `${violated} of ${plural(all, "requirement")} violated.${rest}`;
-  if (silent === pairs) return "No requirement was exercised by any run; nothing is known.";
-  return `No violation found: ${plural(all, "requirement")} tested.${rest}`;
+  return `No violation found: ${tested === all ? "" : `${tested} of `}${plural(all, "requirement")} tested.${rest}`;
+}
+
+/** Requirements exercised nowhere, and the pairs left without a run besides. */
+function silentWords(requirements: Evidence["requirements"], never: number): string {
+  const pairs = requirements.filter(({ verdict }) => verdict === "not_exercised").length;
+  const nowhere =
+    never === 0 ? "" : ` Exercised in no scenario, so not tested: ${plural(never, "requirement")}.`;
+  if (pairs === 0) return nowhere;
+  return `${nowhere} Not exercised by any run: ${pairs} of ${requirements.length} pairs of requirement and scenario.`;
+}
+
+function untested(evidence: Evidence, result: RequirementResult): Html {
+  const index = evidence.requirements.indexOf(result);
+  return html`<li><a href="#${slug("requirement", index)}">${name(result.id)}</a> was exercised in no scenario:
+${name(sentence(result.says))} Nothing is known of it: ${whyNotExercised(result.pattern)}.</li>`;
 }
 
 function lowest(worst: WorstRun | undefined): string {
@@ -43,6 +58,7 @@ ${plural(corners.violations, "violation")} in ${plural(corners.exercised, "corne
 export function verdictSection(evidence: Evidence): Html {
   const overall = overallVerdict(evidence);
   const violated = byVerdict(evidence).filter(({ result }) => result.verdict === "violated");
+  const never = neverExercised(evidence.requirements);
   return html`<section id="verdict" aria-labelledby="verdict-title">
 <h2 id="verdict-title">Verdict</h2>
 <p class="headline ${overall}">${verdictShape(overall)}<span>${headline(evidence)}</span></p>
@@ -52,5 +68,6 @@ ${plural(evidence.extraSimulations.corner, "corner run")} and
 ${plural(evidence.extraSimulations.shrink, "run")} spent on making counterexamples smaller.
 Nothing here is proved or searched.</p>
 ${violated.length === 0 ? undefined : html`<ul class="violations">${violated.map((placed) => violation(evidence, placed))}</ul>`}
+${never.length === 0 ? undefined : html`<ul class="untested">${never.map((result) => untested(evidence, result))}</ul>`}
 </section>`;
 }
