@@ -11,7 +11,7 @@ import {
 } from "./built.mjs";
 
 const SECONDS = 5;
-const REPEATS = 60;
+const REPEATS = 400;
 
 /** A tip-in at a held engine speed, drawn by hand so that both examples run the same manoeuvre. */
 export const TIP_IN = {

@@ -1,5 +1,5 @@
 import { spawnSync } from "node:child_process";
-import { chmodSync, existsSync, mkdirSync, writeFileSync } from "node:fs";
+import { chmodSync, existsSync, mkdirSync, readFileSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
 import { expect, test } from "vitest";
 import { scratchFolder } from "../support/scratch.ts";
@@ -45,6 +45,12 @@ test("every console line of the README prints what stands below it", () => {
   if (updates) writeFileSync(join(ROOT, "README.md"), fresh);
   expect([...readme.matchAll(FENCE)].length).toBeGreaterThan(2);
   expect(updates ? fresh : readme).toBe(fresh);
+});
+
+test("the README's picture is what its command draws", () => {
+  const drawn = readFileSync(join(ROOT, "out/tip-in.svg"), "utf8");
+  if (updates) writeFileSync(join(ROOT, "examples/skarn24/tip-in.svg"), drawn);
+  expect(readFileSync(join(ROOT, "examples/skarn24/tip-in.svg"), "utf8") === drawn).toBe(true);
 });
 
 test("the README's pictures and links lead to files of the repository", () => {

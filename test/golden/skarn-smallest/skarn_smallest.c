@@ -8,6 +8,12 @@
 #include <float.h>
 
 /* ---- 1 assumptions ------------------------------------------------------------------------------- */
+#if (SKARN_SMALLEST_STEP_BOOST_PERIOD_US != 10000)
+#error "skarn_smallest.h was not generated together with this file: SKARN_SMALLEST_STEP_BOOST_PERIOD_US must be 10000"
+#endif
+#if (SKARN_SMALLEST_STEP_GUARD_PERIOD_US != 10000)
+#error "skarn_smallest.h was not generated together with this file: SKARN_SMALLEST_STEP_GUARD_PERIOD_US must be 10000"
+#endif
 #if defined(__FAST_MATH__)
 #error "build skarn_smallest without -ffast-math and with -ffp-contract=off"
 #endif
@@ -47,6 +53,7 @@
 
 /* ---- 2 helpers and constants: comparisons, not fminf or fmaxf, so NaN and -0 act alike everywhere --- */
 #define STEP_S (0x1.47ae14p-7f) /* 0.01 s */
+#define LEAST_BOOST_HYSTERESIS_KPA (2.0f) /* 2; How far the target must fall below the least boost before no boost is wanted any more, kPa. */
 
 static float min_of(float a, float b)
 {
@@ -75,6 +82,18 @@ static int32_t bad_real(float value, float low, float high, int32_t index, int32
 static int32_t bad_count(int32_t value, int32_t low, int32_t high, int32_t index, int32_t so_far)
 {
     return ((so_far < 0) && ((value < low) || (value > high))) ? index : so_far;
+}
+
+/* The index when its value is the first bad one: lower is greater than upper. */
+static int32_t bad_order(float lower, float upper, int32_t index, int32_t so_far)
+{
+    return ((so_far < 0) && !(lower <= upper)) ? index : so_far;
+}
+
+/* The index when its value is the first bad one: lower is not less than upper. */
+static int32_t bad_rise(float lower, float upper, int32_t index, int32_t so_far)
+{
+    return ((so_far < 0) && !(lower < upper)) ? index : so_far;
 }
 
 /* As bad_real, for an array whose first value has the index. */
@@ -134,6 +153,7 @@ static void initialise_slow(const skarn_smallest_calibration_t *calibration,
     initialise_measured(&state->measured);
     state->mode = SKARN_SMALLEST_MODE_START;
     state->target_kpa = 0.0f;
+    state->boost_wanted = false;
     state->integral_term = 0.0f;
     state->opening_ratio = calibration->safe_opening_ratio;
 }
@@ -380,19 +400,34 @@ static float rate_limit(float previous, float wanted, float rise_per_s, float fa
     return clamp(wanted, previous - (fall_per_s * step_s), previous + (rise_per_s * step_s));
 }
 
-/* The target that the loop follows, kPa abs: wanted less the guard's reduction, slewed; starts at the
- * boost there is.
+/* The target that the loop follows, kPa abs: wanted less the guard's reduction, but no lower than ambient
+ * by it, slewed.
+ * `restart`: begin at the boost there is, after power-on, after fail-safe and while a trip holds the gate
+ * open.
  */
 static float follow_target(const skarn_smallest_calibration_t *calibration,
-    skarn_smallest_slow_state_t *state, float wanted_kpa, float reduction_kpa)
+    skarn_smallest_slow_state_t *state, float wanted_kpa, float reduction_kpa, bool restart)
 {
     float previous = state->target_kpa;
-    if (state->mode == SKARN_SMALLEST_MODE_START) {
+    if (restart) {
         previous = state->measured.boost_pressure_kpa;
     }
-    state->target_kpa = rate_limit(previous, wanted_kpa - reduction_kpa, calibration->target_rise_kpa_per_s,
+    const float reduced =
+        max_of(wanted_kpa - reduction_kpa, min_of(wanted_kpa, state->measured.ambient_pressure_kpa));
+    state->target_kpa = rate_limit(previous, reduced, calibration->target_rise_kpa_per_s,
         calibration->target_fall_kpa_per_s, STEP_S);
     return state->target_kpa;
+}
+
+/* Whether the target asks for boost: ambient plus the least boost to begin, a little lower to end. */
+static bool wants_boost(const skarn_smallest_calibration_t *calibration, skarn_smallest_slow_state_t *state)
+{
+    float threshold = state->measured.ambient_pressure_kpa + calibration->least_boost_kpa;
+    if (state->boost_wanted) {
+        threshold = threshold - min_of(LEAST_BOOST_HYSTERESIS_KPA, calibration->least_boost_kpa);
+    }
+    state->boost_wanted = state->target_kpa >= threshold;
+    return state->boost_wanted;
 }
 
 static float proportional_gain_at(const skarn_smallest_calibration_t *calibration)
@@ -472,7 +507,10 @@ static skarn_smallest_mode_t choose_mode(bool failed, bool ready, bool boost_wan
     return mode;
 }
 
-/* Opening the slow step commands: safe, at rest, or the loop's, the last two within the actuator's slew. */
+/* Opening the slow step commands: safe, at rest, or the loop's, the last two within the actuator's slew.
+ * While a trip holds the gate open it stays there, so that the release closes the gate within the slew as
+ * well.
+ */
 static float commanded_opening(const skarn_smallest_calibration_t *calibration,
     const skarn_smallest_slow_state_t *state, skarn_smallest_mode_t mode, bool boost_wanted,
     float loop_opening_ratio)
@@ -515,9 +553,10 @@ void skarn_smallest_step_boost(const skarn_smallest_calibration_t *calibration,
     const float requested = requested_boost(calibration, &state->measured);
     const float wanted = min_of(requested, boost_ceiling(calibration));
     output->boost_wanted_kpa = wanted;
-    const float target = follow_target(calibration, state, wanted, reduction);
-    const bool boost_wanted =
-        target >= (state->measured.ambient_pressure_kpa + calibration->least_boost_kpa);
+    const bool restart =
+        (state->mode == SKARN_SMALLEST_MODE_START) || (state->mode == SKARN_SMALLEST_MODE_FAIL_SAFE);
+    const float target = follow_target(calibration, state, wanted, reduction, restart);
+    const bool boost_wanted = wants_boost(calibration, state);
     const float unlimited = sum_of_terms(calibration, state, target, output);
     const float loop_opening = opening_for(calibration, unlimited);
     const bool failed = state->boost_pressure.failed;
@@ -553,26 +592,30 @@ void skarn_smallest_step_guard(const skarn_smallest_calibration_t *calibration,
     output->fail_safe = fail_safe;
 }
 
-/* Looks at every calibration value: finite, within its range, axes rising. */
+/* Looks at every calibration value: finite, within its range, axes and pairs in order. */
 int32_t skarn_smallest_check_calibration(const skarn_smallest_calibration_t *calibration)
 {
     int32_t bad = -1;
     bad = bad_real(calibration->engine_speed.low, 0.0f, 1000000.0f, 0, bad);
     bad = bad_real(calibration->engine_speed.high, 0.0f, 1000000.0f, 1, bad);
+    bad = bad_rise(calibration->engine_speed.low, calibration->engine_speed.high, 1, bad);
     bad = bad_count(calibration->engine_speed.after_steps, 0, 1000000, 2, bad);
     bad = bad_count(calibration->engine_speed.heals_after_steps, 0, 1000000, 3, bad);
     bad = bad_real(calibration->engine_speed_otherwise_rpm, 0.0f, 1000000.0f, 4, bad);
     bad = bad_real(calibration->accelerator.low, 0.0f, 1.0f, 5, bad);
     bad = bad_real(calibration->accelerator.high, 0.0f, 1.0f, 6, bad);
+    bad = bad_rise(calibration->accelerator.low, calibration->accelerator.high, 6, bad);
     bad = bad_count(calibration->accelerator.after_steps, 0, 1000000, 7, bad);
     bad = bad_count(calibration->accelerator.heals_after_steps, 0, 1000000, 8, bad);
     bad = bad_real(calibration->accelerator_otherwise_ratio, 0.0f, 1.0f, 9, bad);
     bad = bad_real(calibration->boost_pressure.low, 1.0f, 2000.0f, 10, bad);
     bad = bad_real(calibration->boost_pressure.high, 1.0f, 2000.0f, 11, bad);
+    bad = bad_rise(calibration->boost_pressure.low, calibration->boost_pressure.high, 11, bad);
     bad = bad_count(calibration->boost_pressure.after_steps, 0, 1000000, 12, bad);
     bad = bad_count(calibration->boost_pressure.heals_after_steps, 0, 1000000, 13, bad);
     bad = bad_real(calibration->ambient_pressure.low, 1.0f, 2000.0f, 14, bad);
     bad = bad_real(calibration->ambient_pressure.high, 1.0f, 2000.0f, 15, bad);
+    bad = bad_rise(calibration->ambient_pressure.low, calibration->ambient_pressure.high, 15, bad);
     bad = bad_count(calibration->ambient_pressure.after_steps, 0, 1000000, 16, bad);
     bad = bad_count(calibration->ambient_pressure.heals_after_steps, 0, 1000000, 17, bad);
     bad = bad_real(calibration->ambient_pressure_otherwise_kpa, 1.0f, 2000.0f, 18, bad);
@@ -587,22 +630,26 @@ int32_t skarn_smallest_check_calibration(const skarn_smallest_calibration_t *cal
     bad = bad_real(calibration->least_boost_kpa, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 35, bad);
     bad = bad_real(calibration->target_rise_kpa_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 36, bad);
     bad = bad_real(calibration->target_fall_kpa_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 37, bad);
-    bad = bad_real(calibration->proportional_gain, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 38, bad);
-    bad = bad_real(calibration->integral_gain, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 39, bad);
+    bad = bad_real(calibration->proportional_gain, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 38, bad);
+    bad = bad_real(calibration->integral_gain, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 39, bad);
     bad = bad_real(calibration->setpoint_weight_ratio, 0.0f, 2.0f, 40, bad);
     bad = bad_real(calibration->trim_low, -0x1.dcd65p+29f /* -1000000000 */,
         0x1.dcd65p+29f /* 1000000000 */, 41, bad);
     bad = bad_real(calibration->trim_high, -0x1.dcd65p+29f /* -1000000000 */,
         0x1.dcd65p+29f /* 1000000000 */, 42, bad);
+    bad = bad_rise(calibration->trim_low, calibration->trim_high, 42, bad);
     bad = bad_real(calibration->tracking_time_s, 0x1.0c6f7ap-20f /* 0.000001 */, 1000.0f, 43, bad);
     bad = bad_real(calibration->opening_low_ratio, 0.0f, 1.0f, 44, bad);
     bad = bad_real(calibration->opening_high_ratio, 0.0f, 1.0f, 45, bad);
+    bad = bad_rise(calibration->opening_low_ratio, calibration->opening_high_ratio, 45, bad);
     bad = bad_real(calibration->slew_open_ratio_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 46, bad);
     bad = bad_real(calibration->slew_close_ratio_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 47, bad);
     bad = bad_real(calibration->safe_opening_ratio, 0.0f, 1.0f, 48, bad);
+    bad = bad_order(calibration->opening_low_ratio, calibration->safe_opening_ratio, 48, bad);
+    bad = bad_order(calibration->safe_opening_ratio, calibration->opening_high_ratio, 48, bad);
     bad = bad_real(calibration->rest_opening_ratio, 0.0f, 1.0f, 49, bad);
+    bad = bad_order(calibration->opening_low_ratio, calibration->rest_opening_ratio, 49, bad);
+    bad = bad_order(calibration->rest_opening_ratio, calibration->opening_high_ratio, 49, bad);
     bad = bad_real(calibration->fail_safe_torque_ratio, 0.0f, 1.0f, 50, bad);
     return bad;
 }

@@ -15,6 +15,10 @@
 #include <stdbool.h>
 #include <stdint.h>
 
+#ifdef __cplusplus
+extern "C" {
+#endif
+
 /* ---- 1 types ------------------------------------------------------------------------------------- */
 
 /* What the slow step is doing. */
@@ -97,6 +101,7 @@ typedef struct {
     skarn_smallest_signal_state_t ambient_pressure;
     skarn_smallest_mode_t mode;
     float target_kpa;
+    bool boost_wanted;
     /* Integral term in the feedback coordinate, so that a changed gain causes no jump. */
     float integral_term;
     float opening_ratio;
@@ -104,8 +109,9 @@ typedef struct {
 
 /* Exchange between the tasks, on one core: every field has one writer and fits one access, and a step
  * reads or writes it once. No lock is needed.
- * Between the two tasks. The fast step may interrupt the slow one anywhere, so every field has one writer,
- * fits one 32-bit access, is read once per step into a local, and is committed last. No lock is needed.
+ * Between the two tasks. The fast step may interrupt the slow one anywhere, never the other way round.
+ * Every field has one writer, fits one 32-bit access and is read once per step; the slow step commits its
+ * fields last, in an order in which every prefix is safe. No lock is needed.
  */
 typedef struct {
     volatile float wanted_opening_ratio;
@@ -159,22 +165,33 @@ extern const skarn_smallest_calibration_t skarn_smallest_calibration_default;
 
 /* ---- 3 functions --------------------------------------------------------------------------------- */
 
-/* Call once before the first step, and to start over. */
+/* Time between two calls of a step, microseconds. */
+#define SKARN_SMALLEST_STEP_BOOST_PERIOD_US (10000)
+#define SKARN_SMALLEST_STEP_GUARD_PERIOD_US (10000)
+
+/* Call once before the first step of either task, and to start over; only while both tasks are stopped. */
 void skarn_smallest_init(const skarn_smallest_calibration_t *calibration, skarn_smallest_slow_state_t *slow,
     skarn_smallest_exchange_t *exchange);
 
-/* The slow step: call it once per period; the fast step goes first when both fall together. */
+/* The slow step; the fast step goes first when both fall together. It must never interrupt the fast step.
+ * Call it every 10 ms.
+ */
 void skarn_smallest_step_boost(const skarn_smallest_calibration_t *calibration,
     skarn_smallest_slow_state_t *state, skarn_smallest_exchange_t *exchange,
     const skarn_smallest_slow_input_t *input, skarn_smallest_slow_output_t *output);
 
-/* The fast step: call it once per period; it may interrupt the slow step anywhere. */
+/* The fast step; it may interrupt the slow step anywhere. Call it every 10 ms. */
 void skarn_smallest_step_guard(const skarn_smallest_calibration_t *calibration,
     const skarn_smallest_exchange_t *exchange, skarn_smallest_fast_output_t *output);
 
 /* Call it once after the calibration was loaded or changed. Returns the index of the first bad value, or
- * -1; run no step unless it is -1.
+ * -1; run no step unless it is -1. Until it is -1, hold the wastegate at its safe opening and limit engine
+ * torque as in fail-safe.
  */
 int32_t skarn_smallest_check_calibration(const skarn_smallest_calibration_t *calibration);
+
+#ifdef __cplusplus
+}
+#endif
 
 #endif /* SKARN_SMALLEST_H */

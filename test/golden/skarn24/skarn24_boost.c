@@ -9,6 +9,12 @@
 #include <math.h>
 
 /* ---- 1 assumptions ------------------------------------------------------------------------------- */
+#if (SKARN24_BOOST_STEP_BOOST_PERIOD_US != 5000)
+#error "skarn24_boost.h was not generated together with this file: SKARN24_BOOST_STEP_BOOST_PERIOD_US must be 5000"
+#endif
+#if (SKARN24_BOOST_STEP_GUARD_PERIOD_US != 1000)
+#error "skarn24_boost.h was not generated together with this file: SKARN24_BOOST_STEP_GUARD_PERIOD_US must be 1000"
+#endif
 #if defined(__FAST_MATH__)
 #error "build skarn24_boost without -ffast-math and with -ffp-contract=off"
 #endif
@@ -48,8 +54,10 @@
 
 /* ---- 2 helpers and constants: comparisons, not fminf or fmaxf, so NaN and -0 act alike everywhere --- */
 #define ACCELERATION_STEPS (50) /* 50 fast steps */
+#define LONGEST_GAP_STEPS (1000000) /* 1000000; Steps without a sample are counted up to here. */
 #define STEP_S (0x1.47ae14p-8f) /* 0.005 s */
 #define LEAST_GAUGE_KPA (25.0f) /* 25; Smallest gauge target that the gain schedule divides by, kPa. */
+#define LEAST_BOOST_HYSTERESIS_KPA (2.0f) /* 2; How far the target must fall below the least boost before no boost is wanted any more, kPa. */
 #define GUARD_STEP_S (0x1.0624dep-10f) /* 0.001 s */
 
 static bool is_finite(float x)
@@ -89,6 +97,18 @@ static int32_t bad_real(float value, float low, float high, int32_t index, int32
 static int32_t bad_count(int32_t value, int32_t low, int32_t high, int32_t index, int32_t so_far)
 {
     return ((so_far < 0) && ((value < low) || (value > high))) ? index : so_far;
+}
+
+/* The index when its value is the first bad one: lower is greater than upper. */
+static int32_t bad_order(float lower, float upper, int32_t index, int32_t so_far)
+{
+    return ((so_far < 0) && !(lower <= upper)) ? index : so_far;
+}
+
+/* The index when its value is the first bad one: lower is not less than upper. */
+static int32_t bad_rise(float lower, float upper, int32_t index, int32_t so_far)
+{
+    return ((so_far < 0) && !(lower < upper)) ? index : so_far;
 }
 
 /* As bad_real, for an array whose first value has the index. */
@@ -131,7 +151,6 @@ static void initialise_rate_check(skarn24_boost_rate_check_state_t *state)
     state->anchor = 0.0f;
     state->age = 0;
     state->primed = false;
-    state->too_fast = false;
 }
 
 static void initialise_low_pass(skarn24_boost_low_pass_state_t *state)
@@ -173,6 +192,7 @@ static void initialise_slow(const skarn24_boost_calibration_t *calibration,
     initialise_measured(&state->measured);
     state->mode = SKARN24_BOOST_MODE_START;
     state->target_kpa = 0.0f;
+    state->boost_wanted = false;
     state->integral_term = 0.0f;
     state->previous_pressure_kpa = 0.0f;
     state->pressure_rate_kpa_per_s = 0.0f;
@@ -283,27 +303,37 @@ static float condition_accelerator(const skarn24_boost_calibration_t *calibratio
     return value;
 }
 
-/* Changed faster than believable: compares samples one window apart, so that one quantum of a coarse
- * sensor in one step is no alarm. The verdict holds until the next comparison. Call with finite samples
- * only.
+/* Largest believable change since the anchor: one window's worth, or more when samples were missing for
+ * longer.
+ */
+static float believable_change(const skarn24_boost_rate_check_calibration_t *calibration,
+    const skarn24_boost_rate_check_state_t *state)
+{
+    return calibration->most_change * max_of((float)state->age / (float)calibration->window_steps, 1.0f);
+}
+
+/* Changed faster than believable since an accepted sample about one window ago, so that one quantum of a
+ * coarse sensor in one step is no alarm. A jump stays doubted, and its level is not accepted, until the
+ * signal has failed; from then on the believable change grows with time, so that a sensor that came back
+ * elsewhere can heal.
+ * `outside`: this step has no believable sample; it only counts as time gone by.
  */
 static bool moved_too_fast(const skarn24_boost_rate_check_calibration_t *calibration,
-    skarn24_boost_rate_check_state_t *state, float raw)
+    skarn24_boost_rate_check_state_t *state, float raw, bool outside, bool failed)
 {
-    if (!state->primed) {
-        state->anchor = raw;
-        state->age = 0;
-        state->primed = true;
+    bool too_fast = false;
+    if (!outside) {
+        too_fast = state->primed && (fabsf(raw - state->anchor) > believable_change(calibration, state));
+        if (!too_fast && (!state->primed || (state->age >= calibration->window_steps))) {
+            state->anchor = raw;
+            state->age = 0;
+            state->primed = true;
+        }
     }
-    if (state->age < calibration->window_steps) {
+    if ((!too_fast || failed) && (state->age < LONGEST_GAP_STEPS)) {
         state->age = state->age + 1;
     }
-    if (state->age >= calibration->window_steps) {
-        state->too_fast = fabsf(raw - state->anchor) > calibration->most_change;
-        state->anchor = raw;
-        state->age = 0;
-    }
-    return state->too_fast;
+    return too_fast;
 }
 
 /* First-order low-pass filter by the backward Euler rule; starts at its first sample.
@@ -330,9 +360,9 @@ static float condition_boost_pressure(const skarn24_boost_calibration_t *calibra
     skarn24_boost_slow_state_t *state, float raw)
 {
     bool suspect = outside_range(&calibration->boost_pressure, raw);
-    if (!suspect) {
-        suspect = moved_too_fast(&calibration->boost_pressure_rate, &state->boost_pressure_rate, raw);
-    }
+    const bool too_fast = moved_too_fast(&calibration->boost_pressure_rate, &state->boost_pressure_rate,
+        raw, suspect, state->boost_pressure.failed);
+    suspect = suspect || too_fast;
     debounce(&calibration->boost_pressure, &state->boost_pressure, raw, suspect);
     float value = calibration->boost_pressure.low;
     if (state->boost_pressure.has_good) {
@@ -533,6 +563,19 @@ static float feedforward_for(const skarn24_boost_calibration_t *calibration, flo
         calibration->feedforward_values, target_kpa / ambient_kpa, engine_speed_rpm);
 }
 
+/* Engine speed for the foot of the guard's floor, rpm: the highest of the table while the sensor has
+ * failed.
+ */
+static float guard_engine_speed(const skarn24_boost_calibration_t *calibration,
+    const skarn24_boost_slow_state_t *state)
+{
+    float speed = state->measured.engine_speed_rpm;
+    if (state->engine_speed.failed) {
+        speed = calibration->feedforward_columns[7];
+    }
+    return speed;
+}
+
 /* Hands over to the fast step. The flag goes before its value when things worsen and after it when they
  * heal, so the fast step may interrupt anywhere: every prefix of these lines is safe.
  */
@@ -541,9 +584,13 @@ static void commit(const skarn24_boost_calibration_t *calibration, const skarn24
 {
     const float ambient = state->measured.ambient_pressure_kpa;
     const float safe = calibration->guard_safe_pressure_ratio * ambient;
-    const float engine_speed = state->measured.engine_speed_rpm;
-    exchange->guard_base = feedforward_for(calibration, safe, ambient, engine_speed);
-    exchange->accelerator_ratio = state->measured.accelerator_ratio;
+    exchange->guard_base =
+        feedforward_for(calibration, safe, ambient, guard_engine_speed(calibration, state));
+    float accelerator = 1.0f;
+    if (usable(&state->accelerator)) {
+        accelerator = state->measured.accelerator_ratio;
+    }
+    exchange->accelerator_ratio = accelerator;
     exchange->boost_pressure_kpa = state->measured.boost_pressure_kpa;
     if (failed) {
         exchange->fail_safe = true;
@@ -597,19 +644,34 @@ static float rate_limit(float previous, float wanted, float rise_per_s, float fa
     return clamp(wanted, previous - (fall_per_s * step_s), previous + (rise_per_s * step_s));
 }
 
-/* The target that the loop follows, kPa abs: wanted less the guard's reduction, slewed; starts at the
- * boost there is.
+/* The target that the loop follows, kPa abs: wanted less the guard's reduction, but no lower than ambient
+ * by it, slewed.
+ * `restart`: begin at the boost there is, after power-on, after fail-safe and while a trip holds the gate
+ * open.
  */
 static float follow_target(const skarn24_boost_calibration_t *calibration,
-    skarn24_boost_slow_state_t *state, float wanted_kpa, float reduction_kpa)
+    skarn24_boost_slow_state_t *state, float wanted_kpa, float reduction_kpa, bool restart)
 {
     float previous = state->target_kpa;
-    if (state->mode == SKARN24_BOOST_MODE_START) {
+    if (restart) {
         previous = state->measured.boost_pressure_kpa;
     }
-    state->target_kpa = rate_limit(previous, wanted_kpa - reduction_kpa, calibration->target_rise_kpa_per_s,
+    const float reduced =
+        max_of(wanted_kpa - reduction_kpa, min_of(wanted_kpa, state->measured.ambient_pressure_kpa));
+    state->target_kpa = rate_limit(previous, reduced, calibration->target_rise_kpa_per_s,
         calibration->target_fall_kpa_per_s, STEP_S);
     return state->target_kpa;
+}
+
+/* Whether the target asks for boost: ambient plus the least boost to begin, a little lower to end. */
+static bool wants_boost(const skarn24_boost_calibration_t *calibration, skarn24_boost_slow_state_t *state)
+{
+    float threshold = state->measured.ambient_pressure_kpa + calibration->least_boost_kpa;
+    if (state->boost_wanted) {
+        threshold = threshold - min_of(LEAST_BOOST_HYSTERESIS_KPA, calibration->least_boost_kpa);
+    }
+    state->boost_wanted = state->target_kpa >= threshold;
+    return state->boost_wanted;
 }
 
 static float proportional_gain_at(const skarn24_boost_calibration_t *calibration)
@@ -738,9 +800,12 @@ static skarn24_boost_mode_t choose_mode(bool failed, bool ready, bool guard_acti
     return mode;
 }
 
-/* Opening the slow step commands: safe, at rest, or the loop's, the last two within the actuator's slew. */
+/* Opening the slow step commands: safe, at rest, or the loop's, the last two within the actuator's slew.
+ * While a trip holds the gate open it stays there, so that the release closes the gate within the slew as
+ * well.
+ */
 static float commanded_opening(const skarn24_boost_calibration_t *calibration,
-    const skarn24_boost_slow_state_t *state, skarn24_boost_mode_t mode, bool boost_wanted,
+    const skarn24_boost_slow_state_t *state, skarn24_boost_mode_t mode, bool boost_wanted, bool tripped,
     float loop_opening_ratio)
 {
     float wanted = loop_opening_ratio;
@@ -752,16 +817,19 @@ static float commanded_opening(const skarn24_boost_calibration_t *calibration,
     if ((mode == SKARN24_BOOST_MODE_START) || (mode == SKARN24_BOOST_MODE_FAIL_SAFE)) {
         opening = calibration->safe_opening_ratio;
     }
+    if (tripped) {
+        opening = calibration->opening_high_ratio;
+    }
     return opening;
 }
 
 /* The same reading for long while a companion signal moved: a frozen sensor. Call with finite samples
- * only.
+ * only. A companion that is not above zero is not known yet: no verdict until it is.
  */
 static bool stands_still(const skarn24_boost_stuck_check_calibration_t *calibration,
     skarn24_boost_stuck_check_state_t *state, float raw, float companion)
 {
-    if (!same(raw, state->last_raw)) {
+    if (!same(raw, state->last_raw) || !(state->companion_anchor > 0.0f)) {
         state->last_raw = raw;
         state->companion_anchor = companion;
         state->same_steps = 0;
@@ -781,9 +849,9 @@ static void judge_turbo_speed(const skarn24_boost_calibration_t *calibration,
     skarn24_boost_fast_state_t *state, float raw, float boost_pressure_kpa)
 {
     bool suspect = outside_range(&calibration->turbo_speed, raw);
-    if (!suspect) {
-        suspect = moved_too_fast(&calibration->turbo_speed_rate, &state->turbo_speed_rate, raw);
-    }
+    const bool too_fast = moved_too_fast(&calibration->turbo_speed_rate, &state->turbo_speed_rate, raw,
+        suspect, state->turbo_speed.failed);
+    suspect = suspect || too_fast;
     if (!suspect) {
         suspect = stands_still(&calibration->turbo_speed_stuck, &state->turbo_speed_stuck, raw,
             boost_pressure_kpa);
@@ -791,21 +859,20 @@ static void judge_turbo_speed(const skarn24_boost_calibration_t *calibration,
     debounce(&calibration->turbo_speed, &state->turbo_speed, raw, suspect);
 }
 
-/* Over the mechanical limit now, whatever the other checks say: a finite reading at or above it, or a
- * reading above the believable range while the last good one was in the guard's band.
+/* Over the mechanical limit now, whatever the other checks say: a finite reading at or above it, or any
+ * reading above the believable range, infinity included, while the last good one was in the guard's band.
  */
 static bool compute_over_mechanical_limit(const skarn24_boost_calibration_t *calibration,
     const skarn24_boost_fast_state_t *state, float raw)
 {
-    const bool finite = is_finite(raw);
     const bool run_away = (raw > calibration->turbo_speed.high)
         && (state->turbo_speed.last_good >= calibration->guard_reference_speed_rpm);
-    return finite && ((raw >= calibration->speed_limit_rpm) || run_away);
+    return (is_finite(raw) && (raw >= calibration->speed_limit_rpm)) || run_away;
 }
 
-/* Speed the guard acts on, rpm, never lower than any finite reading: while the sensor is doubted, the last
- * good reading plus the fastest plausible gain for as long as the doubt lasts, since a hidden overspeed
- * kills.
+/* Speed the guard acts on, rpm, never lower than a reading inside the believable range: while the sensor
+ * is doubted, the last good reading plus the fastest plausible gain for as long as the doubt lasts, since
+ * a hidden overspeed kills.
  */
 static float guard_speed(const skarn24_boost_calibration_t *calibration, skarn24_boost_fast_state_t *state,
     float raw)
@@ -825,11 +892,16 @@ static float guard_speed(const skarn24_boost_calibration_t *calibration, skarn24
     return speed;
 }
 
-/* Speed for the prediction, rpm: filtered if the spec asks for it. */
+/* Last good speed for the prediction, rpm, filtered if the spec asks for it. While the sensor is doubted
+ * it stands still: the assumed gain belongs to the speed now, and must not look like acceleration.
+ */
 static float filtered_turbo_speed(const skarn24_boost_calibration_t *calibration,
-    skarn24_boost_fast_state_t *state, float speed_rpm)
+    skarn24_boost_fast_state_t *state)
 {
-    return low_pass(&state->turbo_speed_filter, speed_rpm, calibration->turbo_speed_filter_s, GUARD_STEP_S);
+    float filtered = state->turbo_speed.last_good;
+    filtered =
+        low_pass(&state->turbo_speed_filter, filtered, calibration->turbo_speed_filter_s, GUARD_STEP_S);
+    return filtered;
 }
 
 /* Turbo acceleration, rpm/s, over the whole window: one quantum of a counting sensor then moves it little.
@@ -853,11 +925,19 @@ static float turbo_acceleration(skarn24_boost_fast_state_t *state, float speed_r
     return acceleration;
 }
 
-/* Speed one lead time ahead, rpm, never below the speed now. */
-static float predicted_speed(const skarn24_boost_calibration_t *calibration, float filtered_rpm,
-    float acceleration_rpm_per_s, float speed_rpm)
+/* Speed one lead time ahead, rpm, never below the speed now; the speed now until there has been a good
+ * reading, so that neither filter nor history starts from a bad one.
+ */
+static float predicted_speed(const skarn24_boost_calibration_t *calibration,
+    skarn24_boost_fast_state_t *state, float speed_rpm)
 {
-    return max_of(filtered_rpm + (calibration->guard_lead_s * acceleration_rpm_per_s), speed_rpm);
+    float predicted = speed_rpm;
+    if (state->turbo_speed.has_good) {
+        const float filtered = filtered_turbo_speed(calibration, state);
+        const float acceleration = turbo_acceleration(state, filtered);
+        predicted = max_of(filtered + (calibration->guard_lead_s * acceleration), speed_rpm);
+    }
+    return predicted;
 }
 
 /* Fully open in the feedback coordinate: 1, or the gate's largest effective area, mm2. */
@@ -870,7 +950,7 @@ static float highest_coordinate(const skarn24_boost_calibration_t *calibration)
  *   floor = base(engine speed) + g (predicted - reference) + integral;  integral += g w (speed -
  *   reference) dt
  * The base is the feedforward at a safe pressure ratio: a floor that starts from closed comes too late.
- * Own design; figures in examples/skarn24.
+ * Own design.
  */
 static float guard_floor(const skarn24_boost_calibration_t *calibration, skarn24_boost_fast_state_t *state,
     float base, float predicted_rpm, float speed_rpm)
@@ -887,7 +967,7 @@ static float guard_floor(const skarn24_boost_calibration_t *calibration, skarn24
 }
 
 /* Reduction of the boost target, kPa: taken at once in proportion to the predicted excess, given back
- * slowly.
+ * slowly; at most what leads from the ceiling down to no boost.
  */
 static float target_reduction(const skarn24_boost_calibration_t *calibration,
     skarn24_boost_fast_state_t *state, float predicted_rpm)
@@ -896,7 +976,9 @@ static float target_reduction(const skarn24_boost_calibration_t *calibration,
     const float wanted = calibration->guard_target_reduction_kpa_per_rpm * excess;
     const float released = max_of(state->target_reduction_kpa
         - (calibration->guard_target_release_kpa_per_s * GUARD_STEP_S), 0.0f);
-    state->target_reduction_kpa = clamp(wanted, released, calibration->boost_ceiling_kpa);
+    const float most =
+        max_of(calibration->boost_ceiling_kpa - calibration->ambient_pressure_otherwise_kpa, 0.0f);
+    state->target_reduction_kpa = min_of(max_of(wanted, released), most);
     return state->target_reduction_kpa;
 }
 
@@ -975,6 +1057,7 @@ void skarn24_boost_init(const skarn24_boost_calibration_t *calibration, skarn24_
     exchange->accelerator_ratio = 0.0f;
     exchange->boost_pressure_kpa = 0.0f;
     exchange->guard_active = false;
+    exchange->tripped = false;
     exchange->turbo_speed_ready = false;
     exchange->turbo_speed_failed = false;
     exchange->guard_base = 0.0f;
@@ -989,6 +1072,7 @@ void skarn24_boost_step_boost(const skarn24_boost_calibration_t *calibration,
     const skarn24_boost_slow_input_t *input, skarn24_boost_slow_output_t *output)
 {
     const bool guard_active = exchange->guard_active;
+    const bool tripped = exchange->tripped;
     const bool speed_ready = exchange->turbo_speed_ready;
     const bool speed_failed = exchange->turbo_speed_failed;
     const float reduction = exchange->target_reduction_kpa;
@@ -996,16 +1080,18 @@ void skarn24_boost_step_boost(const skarn24_boost_calibration_t *calibration,
     const float requested = requested_boost(calibration, &state->measured);
     const float wanted = min_of(requested, boost_ceiling(calibration, &state->measured));
     output->boost_wanted_kpa = wanted;
-    const float target = follow_target(calibration, state, wanted, reduction);
-    const bool boost_wanted =
-        target >= (state->measured.ambient_pressure_kpa + calibration->least_boost_kpa);
+    const bool restart = tripped || (state->mode == SKARN24_BOOST_MODE_START)
+        || (state->mode == SKARN24_BOOST_MODE_FAIL_SAFE);
+    const float target = follow_target(calibration, state, wanted, reduction, restart);
+    const bool boost_wanted = wants_boost(calibration, state);
     const float unlimited = sum_of_terms(calibration, state, target, output);
     const float loop_opening = opening_for(calibration, unlimited);
     const bool failed = state->boost_pressure.failed || speed_failed;
     const bool ready = state->boost_pressure.has_good && speed_ready;
     state->mode = choose_mode(failed, ready, guard_active, boost_wanted);
-    state->opening_ratio = commanded_opening(calibration, state, state->mode, boost_wanted, loop_opening);
-    if (boost_wanted && ready && !failed) {
+    state->opening_ratio =
+        commanded_opening(calibration, state, state->mode, boost_wanted, tripped, loop_opening);
+    if (boost_wanted && ready && !failed && !tripped) {
         update_integral(calibration, state, loop_opening, guard_active);
     } else {
         fade_integral(calibration, state);
@@ -1035,9 +1121,7 @@ void skarn24_boost_step_guard(const skarn24_boost_calibration_t *calibration,
         torque_limit = calibration->fail_safe_torque_ratio;
     }
     const float base = exchange->guard_base;
-    const float filtered = filtered_turbo_speed(calibration, state, speed);
-    const float acceleration = turbo_acceleration(state, filtered);
-    const float predicted = predicted_speed(calibration, filtered, acceleration, speed);
+    const float predicted = predicted_speed(calibration, state, speed);
     const float floor = guard_floor(calibration, state, base, predicted, speed);
     const float floor_opening = opening_for(calibration, floor);
     bool guard_active = floor_opening > wanted_opening;
@@ -1053,6 +1137,7 @@ void skarn24_boost_step_guard(const skarn24_boost_calibration_t *calibration,
         guard_active = true;
     }
     exchange->guard_active = guard_active;
+    exchange->tripped = over_limit;
     exchange->turbo_speed_ready = usable(&state->turbo_speed);
     exchange->turbo_speed_failed = state->turbo_speed.failed;
     output->over_limit = over_limit;
@@ -1064,22 +1149,25 @@ void skarn24_boost_step_guard(const skarn24_boost_calibration_t *calibration,
     output->fail_safe = fail_safe;
 }
 
-/* Looks at every calibration value: finite, within its range, axes rising. */
+/* Looks at every calibration value: finite, within its range, axes and pairs in order. */
 int32_t skarn24_boost_check_calibration(const skarn24_boost_calibration_t *calibration)
 {
     int32_t bad = -1;
     bad = bad_real(calibration->engine_speed.low, 0.0f, 1000000.0f, 0, bad);
     bad = bad_real(calibration->engine_speed.high, 0.0f, 1000000.0f, 1, bad);
+    bad = bad_rise(calibration->engine_speed.low, calibration->engine_speed.high, 1, bad);
     bad = bad_count(calibration->engine_speed.after_steps, 0, 1000000, 2, bad);
     bad = bad_count(calibration->engine_speed.heals_after_steps, 0, 1000000, 3, bad);
     bad = bad_real(calibration->engine_speed_otherwise_rpm, 0.0f, 1000000.0f, 4, bad);
     bad = bad_real(calibration->accelerator.low, 0.0f, 1.0f, 5, bad);
     bad = bad_real(calibration->accelerator.high, 0.0f, 1.0f, 6, bad);
+    bad = bad_rise(calibration->accelerator.low, calibration->accelerator.high, 6, bad);
     bad = bad_count(calibration->accelerator.after_steps, 0, 1000000, 7, bad);
     bad = bad_count(calibration->accelerator.heals_after_steps, 0, 1000000, 8, bad);
     bad = bad_real(calibration->accelerator_otherwise_ratio, 0.0f, 1.0f, 9, bad);
     bad = bad_real(calibration->boost_pressure.low, 1.0f, 2000.0f, 10, bad);
     bad = bad_real(calibration->boost_pressure.high, 1.0f, 2000.0f, 11, bad);
+    bad = bad_rise(calibration->boost_pressure.low, calibration->boost_pressure.high, 11, bad);
     bad = bad_count(calibration->boost_pressure.after_steps, 0, 1000000, 12, bad);
     bad = bad_count(calibration->boost_pressure.heals_after_steps, 0, 1000000, 13, bad);
     bad = bad_real(calibration->boost_pressure_rate.most_change, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 14,
@@ -1088,15 +1176,18 @@ int32_t skarn24_boost_check_calibration(const skarn24_boost_calibration_t *calib
     bad = bad_real(calibration->boost_pressure_filter_s, 0.0f, 1000.0f, 16, bad);
     bad = bad_real(calibration->ambient_pressure.low, 1.0f, 2000.0f, 17, bad);
     bad = bad_real(calibration->ambient_pressure.high, 1.0f, 2000.0f, 18, bad);
+    bad = bad_rise(calibration->ambient_pressure.low, calibration->ambient_pressure.high, 18, bad);
     bad = bad_count(calibration->ambient_pressure.after_steps, 0, 1000000, 19, bad);
     bad = bad_count(calibration->ambient_pressure.heals_after_steps, 0, 1000000, 20, bad);
     bad = bad_real(calibration->ambient_pressure_otherwise_kpa, 1.0f, 2000.0f, 21, bad);
     bad = bad_real(calibration->charge_temperature.low, 100.0f, 2000.0f, 22, bad);
     bad = bad_real(calibration->charge_temperature.high, 100.0f, 2000.0f, 23, bad);
+    bad = bad_rise(calibration->charge_temperature.low, calibration->charge_temperature.high, 23, bad);
     bad = bad_count(calibration->charge_temperature.after_steps, 0, 1000000, 24, bad);
     bad = bad_count(calibration->charge_temperature.heals_after_steps, 0, 1000000, 25, bad);
     bad = bad_real(calibration->turbo_speed.low, 0.0f, 1000000.0f, 26, bad);
     bad = bad_real(calibration->turbo_speed.high, 0.0f, 1000000.0f, 27, bad);
+    bad = bad_rise(calibration->turbo_speed.low, calibration->turbo_speed.high, 27, bad);
     bad = bad_count(calibration->turbo_speed.after_steps, 0, 1000000, 28, bad);
     bad = bad_count(calibration->turbo_speed.heals_after_steps, 0, 1000000, 29, bad);
     bad =
@@ -1133,28 +1224,32 @@ int32_t skarn24_boost_check_calibration(const skarn24_boost_calibration_t *calib
         0x1.dcd65p+29f /* 1000000000 */, 116, bad);
     bad = bad_axis(calibration->feedforward_columns, 8, 116, bad);
     bad = bad_array(calibration->feedforward_values, 48, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 124, bad);
-    bad = bad_real(calibration->proportional_gain, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 172, bad);
-    bad = bad_real(calibration->integral_gain, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 173, bad);
-    bad = bad_real(calibration->derivative_gain, -0x1.dcd65p+29f /* -1000000000 */,
-        0x1.dcd65p+29f /* 1000000000 */, 174, bad);
+    bad = bad_real(calibration->proportional_gain, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 172, bad);
+    bad = bad_real(calibration->integral_gain, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 173, bad);
+    bad = bad_real(calibration->derivative_gain, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 174, bad);
     bad = bad_real(calibration->derivative_filter_s, 0.0f, 1000.0f, 175, bad);
     bad = bad_real(calibration->setpoint_weight_ratio, 0.0f, 2.0f, 176, bad);
     bad = bad_real(calibration->trim_low, -0x1.dcd65p+29f /* -1000000000 */,
         0x1.dcd65p+29f /* 1000000000 */, 177, bad);
     bad = bad_real(calibration->trim_high, -0x1.dcd65p+29f /* -1000000000 */,
         0x1.dcd65p+29f /* 1000000000 */, 178, bad);
+    bad = bad_rise(calibration->trim_low, calibration->trim_high, 178, bad);
     bad = bad_real(calibration->windup_band, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 179, bad);
     bad = bad_real(calibration->windup_still_below, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 180, bad);
     bad = bad_real(calibration->opening_low_ratio, 0.0f, 1.0f, 181, bad);
     bad = bad_real(calibration->opening_high_ratio, 0.0f, 1.0f, 182, bad);
+    bad = bad_rise(calibration->opening_low_ratio, calibration->opening_high_ratio, 182, bad);
     bad = bad_real(calibration->slew_open_ratio_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 183, bad);
     bad = bad_real(calibration->slew_close_ratio_per_s, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 184, bad);
     bad = bad_real(calibration->safe_opening_ratio, 0.0f, 1.0f, 185, bad);
+    bad = bad_order(calibration->opening_low_ratio, calibration->safe_opening_ratio, 185, bad);
+    bad = bad_order(calibration->safe_opening_ratio, calibration->opening_high_ratio, 185, bad);
     bad = bad_real(calibration->rest_opening_ratio, 0.0f, 1.0f, 186, bad);
+    bad = bad_order(calibration->opening_low_ratio, calibration->rest_opening_ratio, 186, bad);
+    bad = bad_order(calibration->rest_opening_ratio, calibration->opening_high_ratio, 186, bad);
     bad = bad_real(calibration->speed_limit_rpm, 0.0f, 1000000.0f, 187, bad);
     bad = bad_real(calibration->speed_ceiling_rpm, 0.0f, 1000000.0f, 188, bad);
+    bad = bad_order(calibration->speed_ceiling_rpm, calibration->speed_limit_rpm, 188, bad);
     bad = bad_real(calibration->guard_lead_s, 0.0f, 1000.0f, 189, bad);
     bad = bad_real(calibration->guard_reference_speed_rpm, 0.0f, 1000000.0f, 190, bad);
     bad = bad_real(calibration->guard_gain_per_rpm, 0.0f, 0x1.dcd65p+29f /* 1000000000 */, 191, bad);
@@ -1167,6 +1262,7 @@ int32_t skarn24_boost_check_calibration(const skarn24_boost_calibration_t *calib
     bad = bad_count(calibration->trip_after_steps, 0, 1000000, 196, bad);
     bad = bad_real(calibration->trip_torque_ratio, 0.0f, 1.0f, 197, bad);
     bad = bad_real(calibration->trip_release_below_rpm, 0.0f, 1000000.0f, 198, bad);
+    bad = bad_rise(calibration->trip_release_below_rpm, calibration->speed_ceiling_rpm, 198, bad);
     bad = bad_count(calibration->trip_release_after_steps, 0, 1000000, 199, bad);
     bad = bad_real(calibration->trip_accelerator_below_ratio, 0.0f, 1.0f, 200, bad);
     bad = bad_count(calibration->trip_or_after_steps, 0, 1000000, 201, bad);
