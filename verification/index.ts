@@ -17,6 +17,7 @@ export {
   type LocatedResult,
 } from "./counterexample/draw-of-counterexample.ts";
 export { type CounterexampleResult, readCounterexample } from "./counterexample/read-counterexample.ts";
+export { counterexampleName } from "./counterexample/write-counterexample.ts";
 export { type Draw, drawCorner, drawRun, scenarioOf } from "./draw.ts";
 export type {
   CodeFigures,
@@ -44,7 +45,7 @@ export { type Replayed, replay } from "./replay.ts";
 export { batchRunner } from "./run-batch.ts";
 export { type JudgedRun, type RunDraw, requirementsOf, scenarioRunner } from "./run-scenario.ts";
 export { scatteredParameters, scatterNames } from "./scatter.ts";
-export { type SpecValue, setInSpec } from "./set-in-spec.ts";
+export { placeInSpec, type SpecValue, setInSpec } from "./set-in-spec.ts";
 export { type Shrunk, shrink } from "./shrink/shrink.ts";
 export { clopperPearsonLower, clopperPearsonUpper, violationUpper95 } from "./statistics.ts";
 export { type Tuning, tuneFeedforward, writeTuning } from "./tune.ts";

@@ -1,9 +1,20 @@
-import { isCollection, isMap, isNode, isPair, isSeq, type Node, parseDocument, stringify } from "yaml";
+import {
+  type Document,
+  isCollection,
+  isMap,
+  isNode,
+  isPair,
+  isSeq,
+  type Node,
+  parseDocument,
+  stringify,
+} from "yaml";
 
 export type SpecValue =
   | string
   | number
   | boolean
+  | null
   | readonly SpecValue[]
   | { readonly [key: string]: SpecValue };
 
@@ -14,19 +25,40 @@ export type SpecValue =
  * @throws when the text is not YAML, or nothing is at the parent of the path: mistakes of the caller.
  */
 export function setInSpec(text: string, path: string, value: SpecValue | undefined): string {
-  const keys = path.split(/[.[\]]+/).filter((step) => step !== "");
-  const key = keys[keys.length - 1];
   const document = parseDocument(text);
   if (document.errors.length > 0) throw new Error(`cannot edit: ${document.errors[0].message}`);
-  const parent = keys.length > 1 ? document.getIn(keys.slice(0, -1), true) : document.contents;
-  if (!isCollection(parent))
-    throw new Error(`cannot edit: there is no list or map at the parent of \`${path}\``);
-  const places = placesOf(parent as Node);
-  const index = isSeq(parent) ? Number(key) : places.findIndex((place) => place.key === key);
-  if (value === undefined) return index in places ? remove(text, parent as Node, places, index) : text;
+  const found = find(document, path);
+  if (!found) throw new Error(`cannot edit: there is no list or map at the parent of \`${path}\``);
+  const { parent, places, key, index } = found;
+  if (value === undefined) return index in places ? remove(text, parent, places, index) : text;
   const old = places[index];
   if (old) return replace(text, old.value, value);
-  return add(text, parent as Node, places, isMap(parent) ? `${stringify(key).trim()}: ` : "", value);
+  return add(text, parent, places, isMap(parent) ? `${stringify(key).trim()}: ` : "", value);
+}
+
+/** Where the value at `path` stands in a text, its key included, as offsets; undefined where there is none. Never throws. */
+export function placeInSpec(text: string, path: string): readonly [start: number, end: number] | undefined {
+  const document = parseDocument(text);
+  const found = document.errors.length > 0 ? undefined : find(document, path);
+  const place = found?.places[found.index];
+  return place && [place.start, place.end];
+}
+
+interface Found {
+  readonly parent: Node;
+  readonly places: readonly Place[];
+  readonly key: string;
+  readonly index: number;
+}
+
+function find(document: Document, path: string): Found | undefined {
+  const keys = path.split(/[.[\]]+/).filter((step) => step !== "");
+  const key = keys[keys.length - 1];
+  const parent = keys.length > 1 ? document.getIn(keys.slice(0, -1), true) : document.contents;
+  if (!isCollection(parent)) return undefined;
+  const places = placesOf(parent as Node);
+  const index = isSeq(parent) ? Number(key) : places.findIndex((place) => place.key === key);
+  return { parent: parent as Node, places, key, index };
 }
 
 /** Where an item of a list or map begins and ends (comments behind it left out). */
@@ -106,13 +138,19 @@ function linesOf(value: SpecValue): string[] | undefined {
   if (Array.isArray(value)) {
     return value.length > 0 ? value.map((item: SpecValue) => `- ${oneLine(item)}`) : undefined;
   }
-  if (typeof value !== "object") return undefined;
+  if (typeof value !== "object" || value === null) return undefined;
   const entries = Object.entries(value);
   return entries.length > 0
     ? entries.map(([key, item]) => `${stringify(key).trim()}: ${oneLine(item)}`)
     : undefined;
 }
 
+/** JSON, which is YAML too, keeps a text of several lines in one. */
 function oneLine(value: SpecValue): string {
-  return stringify(value, { collectionStyle: "flow", lineWidth: 0, flowCollectionPadding: false }).trim();
+  const text = stringify(value, {
+    collectionStyle: "flow",
+    lineWidth: 0,
+    flowCollectionPadding: false,
+  }).trim();
+  return text.includes("\n") ? JSON.stringify(value) : text;
 }

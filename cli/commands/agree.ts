@@ -1,6 +1,7 @@
 import { generateKit, type Program } from "../../generator/index.ts";
 import { CommandFailure } from "../command-failure.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
+import { requireOutputs } from "../files/require-outputs.ts";
 import { writeFileWhole } from "../files/write-file.ts";
 import { jsonText, mention, refuse } from "../findings.ts";
 import { loadLoop } from "../load-loop.ts";
@@ -95,6 +96,8 @@ export async function agree(specPath: string, options: AgreeOptions, session: Se
   const loaded = loadLoop(specPath);
   if (loaded.value === undefined) return refuse(loaded, session, "nothing was compared");
   mention(loaded, session);
+  const inputs = loaded.sources.map(({ file }) => file);
+  requireOutputs({ "--out": options.out }, inputs);
   const program = mustCompile(generateKit(loaded.value, runtimeText()));
   const { steps, different, notRun } = await runAll(program, options, session);
   const targets = [...steps].map(([name, ran]) => ({

@@ -1,6 +1,7 @@
 import { createHash } from "node:crypto";
 import { generateKit, type Kit, type Program } from "../../generator/index.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
+import { requireOutputFolder } from "../files/require-outputs.ts";
 import { writeFolderWhole } from "../files/write-folder.ts";
 import { jsonText, mention, refuse } from "../findings.ts";
 import { loadLoop } from "../load-loop.ts";
@@ -21,6 +22,8 @@ export function generate(specPath: string, options: { readonly out: string }, se
   const loaded = loadLoop(specPath);
   if (loaded.value === undefined) return refuse(loaded, session, "nothing was written");
   mention(loaded, session);
+  const inputs = loaded.sources.map(({ file }) => file);
+  requireOutputFolder("--out", options.out, inputs);
   const kit = generateKit(loaded.value, runtimeText());
   mustCompile(kit);
   writeFolderWhole(options.out, kit.files);

@@ -10,6 +10,7 @@ import {
 } from "../../verification/index.ts";
 import { generatedController } from "../controller.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
+import { requireOutputs } from "../files/require-outputs.ts";
 import { writeFileWhole } from "../files/write-file.ts";
 import { jsonText, mention, refuse } from "../findings.ts";
 import { loadLoop } from "../load-loop.ts";
@@ -52,6 +53,8 @@ export async function replay(path: string, options: ReplayOptions, session: Sess
   requirePlant(loop);
   const found = drawOfCounterexample(counterexample, loop);
   if (found.located === undefined) return refuse({ ...found, sources: [source] }, session, "nothing was run");
+  const inputs = [path, ...loaded.sources.map(({ file }) => file)];
+  requireOutputs({ "--csv": options.csv, "--plot": options.plot }, inputs);
   const port = await loadController(generatedController(loop), loop);
   const { margin, trace } = replayRun(loop, found.located, port);
   if (options.csv !== undefined) writeFileWhole(options.csv, traceCsv(trace));

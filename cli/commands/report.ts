@@ -3,6 +3,7 @@ import type { Evidence } from "../../verification/index.ts";
 import { renderReport } from "../../verification/report/index.ts";
 import { CommandFailure } from "../command-failure.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
+import { requireOutputs } from "../files/require-outputs.ts";
 import { writeFileWhole } from "../files/write-file.ts";
 import { jsonText, refuse } from "../findings.ts";
 import { type Loaded, loadLoop } from "../load-loop.ts";
@@ -36,6 +37,8 @@ export function report(evidencePath: string, options: ReportOptions, session: Se
     options.spec === undefined ? { diagnostics: [], sources: [] } : loadLoop(options.spec);
   if (options.spec !== undefined && loaded.value === undefined)
     return refuse(loaded, session, "no report was written");
+  const read = [evidencePath, options.agreement, ...loaded.sources.map(({ file }) => file)];
+  requireOutputs({ "--out": options.out }, read);
   const page = pageOf(evidencePath, reportContext(loaded.value, options.agreement));
   writeFileWhole(options.out, page);
   if (session.json) session.result(jsonText({ ok: true, report: options.out }));

@@ -8,6 +8,7 @@ import {
 import { CommandFailure } from "../command-failure.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
 import { inputsFinding } from "../file-findings.ts";
+import { requireOutputs } from "../files/require-outputs.ts";
 import { writeFileWhole } from "../files/write-file.ts";
 import { jsonText, mention, refuse } from "../findings.ts";
 import { loadPlant } from "../load-loop.ts";
@@ -46,6 +47,7 @@ export function simulatePlant(plantPath: string, options: PlantRunOptions, sessi
     const found = problems.map((problem) => inputsFinding(options.inputs, problem));
     return refuse({ diagnostics: found, sources: [source] }, session, "nothing was simulated");
   }
+  requireOutputs({ "--csv": options.csv }, [plantPath, options.inputs]);
   const result = simulateOpenLoop(plantParameters(loaded.value), rows);
   for (const remark of remarks(result)) session.complain(`spoolwright: ${remark}`);
   if (options.csv === undefined && session.json)

@@ -1,5 +1,4 @@
-import { parse } from "yaml";
-import { type LoopSpec, readLoopSpec, type ScenarioSpec } from "../../spec/index.ts";
+import type { LoopSpec, ScenarioSpec } from "../../spec/index.ts";
 import {
   type Draw,
   drawCorner,
@@ -9,16 +8,14 @@ import {
   requirementsOf,
   scatterNames,
   scenarioRunner,
-  setInSpec,
   whyNotExercised,
 } from "../../verification/index.ts";
-import { CommandFailure } from "../command-failure.ts";
 import { generatedController } from "../controller.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
+import { requireOutputs } from "../files/require-outputs.ts";
 import { writeFileWhole } from "../files/write-file.ts";
 import { jsonText, mention, refuse } from "../findings.ts";
-import type { Loaded } from "../load-loop.ts";
-import { loadSource, neighboursOf } from "../load-source.ts";
+import { loadWithSettings } from "../load-with-settings.ts";
 import { requirePlotKind, writePlot } from "../plot-file.ts";
 import { requireScenario } from "../require-tests.ts";
 import type { Session } from "../session.ts";
@@ -33,30 +30,6 @@ export interface ScenarioRunOptions {
   readonly run?: number;
   readonly csv?: string;
   readonly plot?: string;
-}
-
-function applySetting(text: string, setting: string): string {
-  const at = setting.indexOf("=");
-  if (at < 1) throw new CommandFailure(`--set needs path=value, got ${JSON.stringify(setting)}`);
-  try {
-    return setInSpec(text, setting.slice(0, at).trim(), parse(setting.slice(at + 1)));
-  } catch (error) {
-    throw new CommandFailure(`--set ${setting}: ${error instanceof Error ? error.message : String(error)}`);
-  }
-}
-
-/** The spec as it reads with the settings written into its text; findings point into that text. */
-function loadWithSettings(path: string, settings: readonly string[]): Loaded<LoopSpec> {
-  const { source, diagnostics } = loadSource(path);
-  if (source === undefined) return { diagnostics, sources: [] };
-  const changed = { ...source, text: settings.reduce(applySetting, source.text) };
-  const neighbours = neighboursOf(path);
-  const { spec, diagnostics: found } = readLoopSpec(changed, neighbours.open);
-  return {
-    ...(spec === undefined ? {} : { value: spec }),
-    diagnostics: [...found, ...neighbours.diagnostics],
-    sources: [changed, ...neighbours.sources],
-  };
 }
 
 /** The middle of every range is the first corner run. */
@@ -84,6 +57,8 @@ export async function simulateScenario(
   mention(loaded, session);
   const loop = loaded.value;
   const scenario = requireScenario(loop, options.scenario);
+  const inputs = loaded.sources.map(({ file }) => file);
+  requireOutputs({ "--csv": options.csv, "--plot": options.plot }, inputs);
   const port = await loadController(generatedController(loop), loop);
   const result = scenarioRunner(loop, scenario, port, CSV_SIGNALS)(drawFor(scenario, options));
   if (options.csv !== undefined) writeFileWhole(options.csv, traceCsv(result.trace));

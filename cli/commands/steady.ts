@@ -2,6 +2,7 @@ import { extname } from "node:path";
 import { type Equilibrium, equilibriumAt, plantParameters, standardPressure } from "../../hil-sim/index.ts";
 import type { PlantSpec } from "../../spec/index.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
+import { requireOutputs } from "../files/require-outputs.ts";
 import { writeFileWhole } from "../files/write-file.ts";
 import { jsonText, mention, refuse } from "../findings.ts";
 import { loadPlant } from "../load-loop.ts";
@@ -118,6 +119,7 @@ export async function steady(plantPath: string, options: SteadyOptions, session:
   const loaded = loadPlant(plantPath);
   if (loaded.value === undefined) return refuse(loaded, session, "nothing was computed");
   mention(loaded, session);
+  requireOutputs({ "--csv": options.csv, "--plot": options.plot }, [plantPath]);
   const settled = settledStates(loaded.value);
   const map = settled.map(steadyPoint);
   if (options.csv !== undefined) {

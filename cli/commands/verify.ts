@@ -2,9 +2,11 @@ import { availableParallelism } from "node:os";
 import { dirname, join } from "node:path";
 import type { LoopSpec } from "../../spec/index.ts";
 import {
+  counterexampleName,
   evidenceText,
   loadController,
   neverExercised,
+  requirementsOf,
   startWorkers,
   type Verified,
   verifyLoop,
@@ -12,6 +14,7 @@ import {
 import type { ReportContext } from "../../verification/report/index.ts";
 import { generatedController } from "../controller.ts";
 import { EXIT, type ExitCode } from "../exit-codes.ts";
+import { type Outputs, requireOutputs } from "../files/require-outputs.ts";
 import { writeFileWhole } from "../files/write-file.ts";
 import { jsonText, mention, refuse } from "../findings.ts";
 import { loadLoop } from "../load-loop.ts";
@@ -69,6 +72,17 @@ async function runCampaign(
 const counterexampleFolder = ({ evidence, report }: VerifyCommandOptions): string =>
   dirname(evidence ?? report ?? "x");
 
+/** Everything the campaign may write, every counterexample it may find among it. */
+function outputsOf(whole: LoopSpec, options: VerifyCommandOptions): Outputs {
+  const loop = selectTests(whole, options.only);
+  const names = loop.scenarios.flatMap((scenario) =>
+    requirementsOf(loop, scenario).map(({ id }) => counterexampleName(id, scenario.name)),
+  );
+  const folder = counterexampleFolder(options);
+  const found = names.map((name) => [`counterexample ${name}`, join(folder, name)]);
+  return { "--evidence": options.evidence, "--report": options.report, ...Object.fromEntries(found) };
+}
+
 /** Writes what was asked for; the report is made first, so that a failure leaves nothing behind. */
 async function writeAll(
   verified: Verified,
@@ -96,6 +110,10 @@ export async function verify(
   if (loaded.value === undefined) return refuse(loaded, session, "nothing was verified");
   mention(loaded, session);
   requireTests(selectTests(loaded.value, options.only), options.only);
+  requireOutputs(outputsOf(loaded.value, options), [
+    options.agreement,
+    ...loaded.sources.map(({ file }) => file),
+  ]);
   const context = options.report === undefined ? undefined : reportContext(loaded.value, options.agreement);
   const begun = performance.now();
   const verified = await runCampaign(loaded.value, options, session);

@@ -8,8 +8,9 @@ const REASONS: Readonly<Record<string, string>> = {
   ENOTDIR: "a part of the path is not a folder",
   EISDIR: "it is a folder",
   ENAMETOOLONG: "the name is too long",
+  ELOOP: "its symbolic links go round in a circle",
   EEXIST: "something is in the way",
-  ENOENT: "no such file or folder",
+  ENOENT: "no such file or folder, and none can be made there",
 };
 
 /** Turns an error of the operating system into one sentence; other errors pass unchanged. */

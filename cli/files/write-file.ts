@@ -1,6 +1,7 @@
-import { closeSync, fsyncSync, mkdirSync, openSync, renameSync, rmSync, writeFileSync } from "node:fs";
-import { dirname } from "node:path";
+import { closeSync, fsyncSync, openSync, renameSync, rmSync, writeFileSync } from "node:fs";
+import { dirname, resolve } from "node:path";
 import { describeProblem } from "./describe-problem.ts";
+import { makeFolder } from "./make-folder.ts";
 
 /** A name beside the final one, so that the rename stays on one file system. */
 export const partialName = (path: string): string => `${path}.partial-${process.pid}`;
@@ -16,15 +17,22 @@ export function writeNew(path: string, content: string | Uint8Array): void {
   }
 }
 
+/** Removes what a failed write left; where even that fails, the error that led here says more. */
+export function discard(partial: string): void {
+  try {
+    rmSync(partial, { recursive: true, force: true });
+  } catch {}
+}
+
 /** Writes a whole file or leaves what was there. A symbolic link at `path` is replaced, not followed. */
 export function writeFileWhole(path: string, content: string | Uint8Array): void {
   const partial = partialName(path);
   try {
-    mkdirSync(dirname(path), { recursive: true });
+    makeFolder(dirname(resolve(path)));
     writeNew(partial, content);
     renameSync(partial, path);
   } catch (error) {
-    rmSync(partial, { force: true });
+    discard(partial);
     throw describeProblem(error, `cannot write ${path}`);
   }
 }

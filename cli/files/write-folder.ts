@@ -2,7 +2,8 @@ import { existsSync, lstatSync, mkdirSync, readdirSync, readFileSync, renameSync
 import { dirname, isAbsolute, join, resolve, sep } from "node:path";
 import { CommandFailure } from "../command-failure.ts";
 import { describeProblem } from "./describe-problem.ts";
-import { partialName, writeNew } from "./write-file.ts";
+import { ifThere, makeFolder } from "./make-folder.ts";
+import { discard, partialName, writeNew } from "./write-file.ts";
 
 const MANIFEST = "manifest.json";
 
@@ -32,7 +33,7 @@ function namesWrittenBefore(folder: string): ReadonlySet<string> | undefined {
 
 /** What stands at the output folder's name: nothing or an empty folder, or an earlier output whose other files are kept. */
 function inspect(folder: string): { readonly keep: readonly string[] } {
-  const status = lstatSync(folder, { throwIfNoEntry: false });
+  const status = ifThere(() => lstatSync(folder));
   if (status === undefined) return { keep: [] };
   if (status.isSymbolicLink())
     throw new CommandFailure(`${folder} is a symbolic link; name the folder itself`);
@@ -57,6 +58,16 @@ function fill(folder: string, files: ReadonlyMap<string, string>): void {
   }
 }
 
+/** Moves the old folder back; the error of the new one stays the one to be told. */
+function restored(old: string, folder: string, error: unknown): unknown {
+  try {
+    renameSync(old, folder);
+    return error;
+  } catch {
+    return describeProblem(error, `cannot replace ${folder}, whose earlier content is now ${old}`);
+  }
+}
+
 /** Puts the new folder in the old one's place; files that are not ours move along. */
 function swap(fresh: string, folder: string, keep: readonly string[]): void {
   const old = `${folder}.previous-${process.pid}`;
@@ -65,8 +76,7 @@ function swap(fresh: string, folder: string, keep: readonly string[]): void {
   try {
     renameSync(fresh, folder);
   } catch (error) {
-    if (replaces) renameSync(old, folder);
-    throw error;
+    throw replaces ? restored(old, folder, error) : error;
   }
   for (const name of keep) {
     if (!existsSync(join(folder, name))) renameSync(join(old, name), join(folder, name));
@@ -86,11 +96,11 @@ export function writeFolderWhole(folder: string, files: ReadonlyMap<string, stri
   }
   const fresh = partialName(target);
   try {
-    mkdirSync(dirname(target), { recursive: true });
+    makeFolder(dirname(target));
     fill(fresh, files);
     swap(fresh, target, keep);
   } catch (error) {
-    rmSync(fresh, { recursive: true, force: true });
+    discard(fresh);
     throw describeProblem(error, `cannot write ${folder}`);
   }
 }

@@ -11,7 +11,7 @@ import {
 } from "fast-check";
 import { describe, expect, it } from "vitest";
 import { parse, stringify } from "yaml";
-import { type SpecValue, setInSpec } from "../../verification/set-in-spec.ts";
+import { placeInSpec, type SpecValue, setInSpec } from "../../verification/set-in-spec.ts";
 
 const key = () => constantFrom("a", "b", "target", "gain", "over");
 const { value } = letrec<{ value: SpecValue }>((tie) => ({
@@ -89,6 +89,14 @@ describe("setting a value in a spec", () => {
       "- [1, 2]\n      - [3, 4] # last",
       "- [5, 6.5]\n      - [7]\n      - [8] # last",
     ],
+    ["controller.overspeed_guard.trip", null, "trip: {after: 2 ms}", "trip: null"],
+    [
+      "controller.overspeed_guard",
+      null,
+      "overspeed_guard:\n    limit: 165000 rpm\n    trip: {after: 2 ms}\n",
+      "overspeed_guard:\n    null\n",
+    ],
+    ["requirements[0].says", "two\nlines", "says: first", 'says: "two\\nlines"'],
     ["controller.overspeed_guard.trip.after", "50 ms", "{after: 2 ms}", "{after: 50 ms}"],
     ["controller.overspeed_guard.trip.torque", "40 %", "{after: 2 ms}", "{after: 2 ms, torque: 40 %}"],
     ["controller.feedback.integral", "1 mm2/s", "# last\n", "# last\n    integral: 1 mm2/s\n"],
@@ -108,5 +116,18 @@ describe("setting a value in a spec", () => {
 
   it("names a path whose parent does not exist", () => {
     expect(() => setInSpec(SPEC, "controller.nowhere.gain", 1)).toThrow("controller.nowhere.gain");
+  });
+
+  it("finds what it has set, with its key", () => {
+    const found = (path: string, text = SPEC): string | undefined => {
+      const place = placeInSpec(text, path);
+      return place && text.slice(...place);
+    };
+    expect(found("controller.overspeed_guard.trip.after")).toBe("after: 2 ms");
+    expect(found("requirements[1].id")).toBe("id: two");
+    expect(found("fresh", setInSpec(SPEC, "fresh", [1, 2]))).toBe("fresh: [1, 2]");
+    expect(found("controller.nowhere.gain")).toBeUndefined();
+    expect(found("controller.gain")).toBeUndefined();
+    expect(found("a", "a: [")).toBeUndefined();
   });
 });
