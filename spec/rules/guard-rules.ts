@@ -11,6 +11,7 @@ export const checkGuard: Rule = (seen, report) => {
   checkSensorRange(seen, report);
   checkMargin(seen, report);
   checkOrder(seen, report);
+  checkTorque(seen, report);
   checkPlantLimit(seen, report);
 };
 
@@ -131,6 +132,24 @@ function checkOrder({ controller: { overspeedGuard: guard } }: Seen, report: Rep
       because,
       fix: `release_below: ${short(ceiling * 0.9)} rpm`,
     });
+}
+
+function checkTorque({ controller: { overspeedGuard, failSafe } }: Seen, report: Report): void {
+  for (const [name, block] of [
+    ["the trip", overspeedGuard?.trip],
+    ["fail-safe", failSafe],
+  ] as const) {
+    const at = writtenAt(block, "torque");
+    const torque = block?.torque;
+    if (at === undefined || torque === undefined || torque.value < 1) continue;
+    report({
+      code: "torque-not-limited",
+      at,
+      message: `the torque limit of ${name}, ${torque.written}, limits nothing`,
+      label: "below 100 %",
+      fix: "torque: 40 %",
+    });
+  }
 }
 
 function checkPlantLimit({ controller: { overspeedGuard: guard }, plant }: Seen, report: Report): void {

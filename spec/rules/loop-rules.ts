@@ -29,6 +29,6 @@ export function checkLoop(read: HoledLoop, root: Node, plant: PlantSpec | undefi
     };
     for (const rule of CONTROLLER_RULES) rule(seen, report);
   }
-  for (const { value } of scenarios) if (value !== undefined) checkScenario(value, plant, report);
+  for (const { value } of scenarios) if (value !== undefined) checkScenario(value, controller, plant, report);
   checkRequirements(read, report);
 }

@@ -4,7 +4,7 @@ import { RADIANS_PER_SECOND_PER_RPM } from "../quantities/rpm.ts";
 import type { HoledLoop } from "../read-loop-spec.ts";
 import type { Free } from "../scenario-spec.ts";
 import type { Span } from "../span.ts";
-import { short, writtenAt } from "./rule.ts";
+import { type Controller, short, writtenAt } from "./rule.ts";
 
 type Scenario = NonNullable<NonNullable<HoledLoop["scenarios"]>[number]["value"]>;
 type Course = Extract<Scenario["accelerator"], readonly unknown[]>;
@@ -16,12 +16,18 @@ interface Point {
 }
 
 /** Rules about one scenario. */
-export function checkScenario(scenario: Scenario, plant: PlantSpec | undefined, report: Report): void {
+export function checkScenario(
+  scenario: Scenario,
+  controller: Controller | undefined,
+  plant: PlantSpec | undefined,
+  report: Report,
+): void {
   for (const key of ["engineSpeed", "accelerator", "target"] as const) {
     const read = scenario[key];
     if (Array.isArray(read)) checkCourse(read as Course, scenario, key, report);
   }
   checkCeilings(scenario, report);
+  if (controller?.target !== undefined) checkPosedTarget(scenario, controller.target, report);
   if (plant !== undefined) checkValidity(scenario, plant, report);
 }
 
@@ -72,6 +78,47 @@ function checkCeilings(scenario: Scenario, report: Report): void {
     message: "`ceilings: off` has no effect without `target`",
     fix: "add `target`, or remove `ceilings`",
   });
+}
+
+/** Standard atmosphere at sea level, ISO 2533; kPa. A pressure ratio allows no more than its multiple. */
+const SEA_LEVEL_KPA = 101.325;
+
+/** A posed target that the controller cuts tests something else than it says. */
+function checkPosedTarget(
+  scenario: Scenario,
+  { ceiling, pressureRatioCeiling }: NonNullable<Controller["target"]>,
+  report: Report,
+): void {
+  if (scenario.ceilings === "off") return;
+  const posed = valuesOf(scenario.target);
+  const ceilings = [
+    { quantity: ceiling, named: "ceiling", most: ceiling?.value },
+    {
+      quantity: pressureRatioCeiling,
+      named: "pressure ratio ceiling",
+      most: pressureRatioCeiling && pressureRatioCeiling.value * SEA_LEVEL_KPA,
+    },
+  ];
+  for (const { quantity, named, most } of ceilings) {
+    const above = posed.find(({ high }) => most !== undefined && high > most * (1 + 1e-9));
+    if (quantity === undefined || most === undefined || above === undefined) continue;
+    report({
+      code: "posed-target-above-ceiling",
+      at: above.at,
+      message: `the scenario poses a target of up to ${short(above.high)} kPa abs, which the ${named} of ${quantity.written} cuts`,
+      label: `at most ${short(most)} kPa abs`,
+      because: [{ at: quantity.at, message: "the ceiling" }],
+      fix: "ceilings: off",
+    });
+    return;
+  }
+}
+
+/** Values of a held signal or of a course. */
+function valuesOf(read: Scenario["target"]): readonly Free[] {
+  if (read === undefined) return [];
+  if (Array.isArray(read)) return (read as readonly Point[]).flatMap((point) => point?.value ?? []);
+  return "low" in read ? [read] : [];
 }
 
 /** Engine speeds of a scenario: every value it can take. */

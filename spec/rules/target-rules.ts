@@ -1,11 +1,12 @@
 import type { Report } from "../diagnostics/report.ts";
 import { startOf } from "../text/positions.ts";
-import { type Rule, type Seen, short } from "./rule.ts";
+import { type Rule, type Seen, short, writtenAt } from "./rule.ts";
 
 /** The target and the actuator that follows it. */
 export const checkTarget: Rule = (seen, report) => {
   checkCeiling(seen, report);
   checkOpenings(seen, report);
+  checkSafeOpening(seen, report);
   checkPowerLoss(seen, report);
 };
 
@@ -49,6 +50,36 @@ function checkOpenings({ controller: { actuator } }: Seen, report: Report): void
       fix: `${key}: ${opening.value > range.high.value ? range.high.written : range.low.written}`,
     });
   }
+}
+
+/** Share of the gate's opening that fail-safe and trip must reach at least: common practice, no source. */
+const HALF_OPEN = 0.5;
+
+/** The trip opens to the end of the range, fail-safe to the safe opening. */
+function checkSafeOpening({ controller: { actuator, overspeedGuard } }: Seen, report: Report): void {
+  const { opening: range, safeOpening } = actuator ?? {};
+  if (actuator === undefined || range === undefined) return;
+  const isNarrow = range.high.value < HALF_OPEN;
+  if (isNarrow && overspeedGuard !== undefined) {
+    report({
+      code: "opening-below-half",
+      at: actuator.places.opening,
+      message: `the overspeed trip would open the wastegate only to ${range.high.written}`,
+      label: "must reach at least 50 %",
+      because: [{ at: startOf(overspeedGuard.span), message: "the overspeed guard" }],
+      fix: `opening: ${range.low.written} to 100 %`,
+    });
+    return;
+  }
+  const at = writtenAt(actuator, "safe_opening");
+  if (safeOpening === undefined || at === undefined || safeOpening.value >= HALF_OPEN) return;
+  report({
+    code: "safe-opening-below-half",
+    at,
+    message: `fail-safe opens the wastegate only to ${safeOpening.written}`,
+    label: "boost may remain",
+    fix: `safe_opening: ${isNarrow ? range.high.written : "100 %"}`,
+  });
 }
 
 function checkPowerLoss({ controller: { actuator } }: Seen, report: Report): void {

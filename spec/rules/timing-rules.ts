@@ -55,6 +55,9 @@ function checkTrackingTime({ controller: { step, feedback } }: Seen, report: Rep
   });
 }
 
+/** Further ahead a straight line is no prediction: common practice, no source. */
+const LONGEST_LEAD_S = 1;
+
 /** A guard that looks ahead less far than its own period learns of an overspeed one step late. */
 function checkLead({ controller }: Seen, report: Report): void {
   const guard = controller.overspeedGuard;
@@ -62,6 +65,14 @@ function checkLead({ controller }: Seen, report: Report): void {
   const lead = guard?.lead;
   const at = writtenAt(guard, "lead");
   if (guard?.gain === undefined || period === undefined || lead === undefined || at === undefined) return;
+  if (lead.value > LONGEST_LEAD_S)
+    report({
+      code: "lead-long",
+      at,
+      message: `the guard predicts turbo speed ${lead.written} ahead, along a straight line`,
+      label: "at most 1 s",
+      fix: "lead: 120 ms",
+    });
   if (lead.value === 0 || period.value <= lead.value) return;
   report({
     code: "lead-shorter-than-step",

@@ -145,6 +145,32 @@ export const ENGINEERING_CODES = {
     example: "limit: 165000 rpm\nmargin: 3 %\ntrip: { release_below: 162000 rpm, ... }",
     fix: "Release well below limit * (1 - margin).",
   },
+  "opening-below-half": {
+    severity: "error",
+    cause:
+      "The overspeed trip opens the wastegate to the end of the actuator's range. Less than half of the gate's opening may not hold the turbo.",
+    example: "actuator: { opening: 0 % to 40 %, ... }\noverspeed_guard: { ... }",
+    fix: "Give the range that the gate can travel: `opening: 0 % to 100 %`.",
+  },
+  "safe-opening-below-half": {
+    severity: "warning",
+    cause: "In fail-safe the wastegate goes to its safe opening; less than half open may leave boost on.",
+    example: "safe_opening: 20 %",
+    fix: "Use the whole opening, `safe_opening: 100 %`, unless the plant shows that less is enough.",
+  },
+  "torque-not-limited": {
+    severity: "warning",
+    cause: "A torque limit of 100 % is no limit, so the trip or fail-safe acts through the wastegate alone.",
+    example: "trip: { torque: 100 %, ... }\nfail_safe: { torque: 100 % }",
+    fix: "Limit torque to what the engine gives without boost, for example `torque: 40 %`.",
+  },
+  "lead-long": {
+    severity: "warning",
+    cause:
+      "The guard predicts turbo speed along a straight line. More than a second ahead that line is no prediction, and the guard acts in every tip-in.",
+    example: "lead: 2 s",
+    fix: "Use about the dead time of valve and turbo: `lead: 120 ms`.",
+  },
   "limit-above-plant": {
     severity: "warning",
     cause: "The guard protects a higher speed than the turbo of the plant file stands.",
@@ -168,6 +194,13 @@ export const ENGINEERING_CODES = {
     cause: "A point of a course may come before the point above it has finished.",
     example: "- { at: 2 s, value: 50 % }\n- { at: 1 s, value: 100 % }",
     fix: "Sort the points by time, and keep free times apart.",
+  },
+  "posed-target-above-ceiling": {
+    severity: "warning",
+    cause:
+      "A scenario poses a target that the controller's own ceiling cuts, so the scenario does not test what it says.",
+    example: "ceiling: 245 kPa abs\ntarget: 260 kPa abs         # in a scenario, and ceilings are on",
+    fix: "Pose a target below the ceiling, or add `ceilings: off` to the scenario.",
   },
   "outside-validity": {
     severity: "warning",
