@@ -17,7 +17,8 @@ function figures(result: RequirementResult): string {
 }
 
 function silence({ pattern, corners }: RequirementResult): string {
-  const inCorners = corners.exercised > 0 ? `; exercised in ${corners.exercised} corner runs only` : "";
+  const inCorners =
+    corners.exercised > 0 ? `; exercised in ${corners.exercised} of ${corners.runs} corner runs only` : "";
   return `: ${whyNotExercised(pattern)}${inCorners}`;
 }
 
@@ -69,6 +70,7 @@ export function jsonRow(result: RequirementResult, folder: string) {
     worst_margin: worst?.margin ?? null,
     violation_probability_upper_95: result.violationProbabilityUpper95,
     corner_runs: corners.runs,
+    corner_exercised: corners.exercised,
     corner_violations: corners.violations,
     corner_worst_margin: corners.worst?.margin ?? null,
     counterexample: counterexample === undefined ? null : join(folder, counterexample),

@@ -1,10 +1,23 @@
 import type { Pattern } from "../spec/index.ts";
 import type { RequirementResult } from "./evidence.ts";
 
-/** The requirements that were exercised in none of their scenarios, each by its first result: nothing is known of them. */
-export function neverExercised(results: readonly RequirementResult[]): RequirementResult[] {
-  const known = new Set(results.filter(({ verdict }) => verdict !== "not_exercised").map(({ id }) => id));
+/** One result of each requirement for which none of its results is known, in the order of the results. */
+function without(
+  results: readonly RequirementResult[],
+  isKnown: (result: RequirementResult) => boolean,
+): RequirementResult[] {
+  const known = new Set(results.filter(isKnown).map(({ id }) => id));
   return results.filter(({ id }, i) => !known.has(id) && results.findIndex((other) => other.id === id) === i);
+}
+
+/** The requirements that no run, random or corner, exercised in any scenario: nothing is known of them. */
+export function neverExercised(results: readonly RequirementResult[]): RequirementResult[] {
+  return without(results, ({ exercised, corners }) => exercised + corners.exercised > 0);
+}
+
+/** The requirements for which no random run counts, and no corner run violates: not tested, and without a bound. */
+export function untested(results: readonly RequirementResult[]): RequirementResult[] {
+  return without(results, ({ verdict }) => verdict !== "not_exercised");
 }
 
 const COUNTS = "that counts (by default only one that the plant can follow)";

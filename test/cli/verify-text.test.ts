@@ -47,7 +47,7 @@ describe("the line of a requirement", () => {
     const silent = sampleResult({ verdict: "not_exercised", exercised: 0, corners: corners(0.4, 0) });
     const line = requirementLine(silent);
     expect(line).toMatch(/^not exercised overshoot_small +tip_in +0 of 1000 runs: boost came within 2.5 %/);
-    expect(line).toMatch(/; exercised in 20 corner runs only$/);
+    expect(line).toMatch(/; exercised in 20 of 20 corner runs only$/);
     expect(line).not.toMatch(/margin|violation/);
   });
 });

@@ -72,6 +72,7 @@ describe("requirements that hold", () => {
           worst_margin: expect.any(Number),
           violation_probability_upper_95: expect.any(Number),
           corner_runs: 20,
+          corner_exercised: 20,
           corner_violations: 0,
           corner_worst_margin: expect.any(Number),
           counterexample: null,

@@ -1,5 +1,5 @@
 import type { Evidence, RequirementResult, Verdict } from "../evidence.ts";
-import { neverExercised, whyNotExercised } from "../not-exercised.ts";
+import { untested, whyNotExercised } from "../not-exercised.ts";
 import { type Html, html, trusted } from "./html.ts";
 import { percentUp, whole } from "./numbers.ts";
 
@@ -28,13 +28,11 @@ export function verdictMark(verdict: Verdict): Html {
   return html`<span class="verdict ${verdict}">${verdictShape(verdict)} ${word}</span>`;
 }
 
-/** The worst over all requirements: one that no run exercised keeps the whole from holding. */
+/** The worst over all requirements: one that was not tested keeps the whole from holding. */
 export function overallVerdict(evidence: Evidence): Verdict {
   const verdicts = new Set(evidence.requirements.map(({ verdict }) => verdict));
   if (verdicts.has("violated")) return "violated";
-  return verdicts.has("holds") && neverExercised(evidence.requirements).length === 0
-    ? "holds"
-    : "not_exercised";
+  return verdicts.has("holds") && untested(evidence.requirements).length === 0 ? "holds" : "not_exercised";
 }
 
 export function plural(count: number, one: string, many = `${one}s`): string {

@@ -57,8 +57,8 @@ describe("the report", () => {
       "Seed 20240611, 1000 runs per scenario, spoolwright 0.1.0",
     );
     expect(words(document, "main > :first-child .headline")).toBe(
-      "1 of 4 requirements violated. Exercised in no scenario, so not tested: 1 requirement. " +
-        "Not exercised by any run: 1 of 4 pairs of requirement and scenario.",
+      "1 of 4 requirements violated. Exercised in corner runs only: 1 requirement. " +
+        "Not exercised by any random run: 1 of 4 pairs of requirement and scenario.",
     );
   });
 
@@ -227,7 +227,7 @@ describe("the report", () => {
     const document = read(renderReport(sampleEvidence({ requirements })));
     expect(words(document, ".headline.not_exercised")).toBe(
       "No violation found: 2 of 3 requirements tested. Exercised in no scenario, so not tested: 1 requirement. " +
-        "Not exercised by any run: 3 of 5 pairs of requirement and scenario.",
+        "Not exercised by any random run: 3 of 5 pairs of requirement and scenario.",
     );
     expect(document.querySelectorAll(".untested li").length).toBe(1);
     expect(words(document, ".untested li")).toMatch(
@@ -260,7 +260,7 @@ describe("the report", () => {
       worst: _worst,
       margins: _margins,
       ...bare
-    } = sampleResult({ verdict: "not_exercised", exercised: 0 });
+    } = sampleResult({ verdict: "not_exercised", exercised: 0, corners: NO_CORNERS });
     const document = read(renderReport(sampleEvidence({ requirements: [bare] })));
     expect(words(document, ".headline")).toBe("No requirement was exercised by any run; nothing is known.");
     expect(words(document, "#requirement-1")).toContain(

@@ -1,5 +1,5 @@
 import type { Evidence, RequirementResult, WorstRun } from "../../evidence.ts";
-import { neverExercised, whyNotExercised } from "../../not-exercised.ts";
+import { neverExercised, untested, whyNotExercised } from "../../not-exercised.ts";
 import { byVerdict, type Placed } from "../by-verdict.ts";
 import { type Html, html, name } from "../html.ts";
 import { margin } from "../numbers.ts";
@@ -17,23 +17,26 @@ function headline({ requirements }: Evidence): string {
   if (pairs === 0) return "Nothing was tested: the evidence holds no requirement.";
   const all = countOfIds(requirements);
   const violated = countOfIds(requirements.filter(({ verdict }) => verdict === "violated"));
-  const tested = all - neverExercised(requirements).length;
-  if (tested === 0) return "No requirement was exercised by any run; nothing is known.";
-  const rest = silentWords(requirements, all - tested);
+  const never = neverExercised(requirements).length;
+  if (never === all) return "No requirement was exercised by any run; nothing is known.";
+  const tested = all - untested(requirements).length;
+  const rest = silentWords(requirements, never, all - tested - never);
   if (violated > 0) return `${violated} of ${plural(all, "requirement")} violated.${rest}`;
   return `No violation found: ${tested === all ? "" : `${tested} of `}${plural(all, "requirement")} tested.${rest}`;
 }
 
-/** Requirements exercised nowhere, and the pairs left without a run besides. */
-function silentWords(requirements: Evidence["requirements"], never: number): string {
+/** Requirements exercised nowhere or in corners only, and the pairs left without a random run. */
+function silentWords(requirements: Evidence["requirements"], never: number, cornerOnly: number): string {
   const pairs = requirements.filter(({ verdict }) => verdict === "not_exercised").length;
   const nowhere =
     never === 0 ? "" : ` Exercised in no scenario, so not tested: ${plural(never, "requirement")}.`;
-  if (pairs === 0) return nowhere;
-  return `${nowhere} Not exercised by any run: ${pairs} of ${requirements.length} pairs of requirement and scenario.`;
+  if (pairs === 0) return "";
+  const corners =
+    cornerOnly === 0 ? "" : ` Exercised in corner runs only: ${plural(cornerOnly, "requirement")}.`;
+  return `${nowhere}${corners} Not exercised by any random run: ${pairs} of ${requirements.length} pairs of requirement and scenario.`;
 }
 
-function untested(evidence: Evidence, result: RequirementResult): Html {
+function unknown(evidence: Evidence, result: RequirementResult): Html {
   const index = evidence.requirements.indexOf(result);
   return html`<li><a href="#${slug("requirement", index)}">${name(result.id)}</a> was exercised in no scenario:
 ${name(sentence(result.says))} Nothing is known of it: ${whyNotExercised(result.pattern)}.</li>`;
@@ -68,6 +71,6 @@ ${plural(evidence.extraSimulations.corner, "corner run")} and
 ${plural(evidence.extraSimulations.shrink, "run")} spent on making counterexamples smaller.
 Nothing here is proved or searched.</p>
 ${violated.length === 0 ? undefined : html`<ul class="violations">${violated.map((placed) => violation(evidence, placed))}</ul>`}
-${never.length === 0 ? undefined : html`<ul class="untested">${never.map((result) => untested(evidence, result))}</ul>`}
+${never.length === 0 ? undefined : html`<ul class="untested">${never.map((result) => unknown(evidence, result))}</ul>`}
 </section>`;
 }
