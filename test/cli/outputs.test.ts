@@ -7,6 +7,11 @@ import { scratchFolder } from "../support/scratch.ts";
 const SPEC = "skarn24.yaml";
 const PLANT = "skarn24.plant.yaml";
 const EVIDENCE = '{ "format": 1, "requirements": [], "traces": [] }';
+const INPUTS = [
+  "time_s,throttle_command_ratio,wastegate_command_ratio,bypass_command_ratio,fuel_on,ambient_pressure_kpa,ambient_temperature_k,engine_speed_rpm",
+  "0,0.25,1,0,1,101.325,298,4000",
+  "1,1,0,0,1,101.325,298,4000",
+].join("\n");
 const COUNTEREXAMPLE = "tip_in_overshoot.tip_in.counterexample.yaml";
 
 /** The complete example in a folder of its own, with an evidence file and an inputs file. */
@@ -14,6 +19,7 @@ function demo(): string {
   const folder = scratchFolder();
   for (const name of [SPEC, PLANT]) cpSync(join(ROOT, "examples/skarn24", name), join(folder, name));
   writeFileSync(join(folder, "e.json"), EVIDENCE);
+  writeFileSync(join(folder, "in.csv"), INPUTS);
   return folder;
 }
 
@@ -34,6 +40,8 @@ test.each([
   [["verify", SPEC, ...MANY, "--evidence", "n", "--agreement", "e.json", "--report", "e.json"], "overwrite"],
   [["verify", SPEC, ...MANY, "--evidence", `${SPEC}/x.json`], `${SPEC} is a file, not a folder`],
   [["verify", SPEC, ...MANY, "--report", "."], "it is a folder"],
+  [["simulate", PLANT, "--inputs", "in.csv", "--csv", "in.csv"], "would overwrite in.csv"],
+  [["simulate", PLANT, "--inputs", "in.csv", "--csv", PLANT], `would overwrite ${PLANT}`],
   [["steady", PLANT, "--csv", PLANT], `would overwrite ${PLANT}`],
   [["report", "e.json", "--out", "e.json"], "would overwrite e.json"],
   [["report", "e.json", "--spec", SPEC, "--out", PLANT], `would overwrite ${PLANT}`],
