@@ -87,7 +87,7 @@ export function followTarget(
   return state.targetKpa;
 }
 
-/** How far the target must fall below the least boost before no boost is wanted any more, kPa. */
+/** Fall below the least boost that ends it, kPa. */
 export const LEAST_BOOST_HYSTERESIS_KPA: Real = 2;
 
 /** Whether the target asks for boost: ambient plus the least boost to begin, a little lower to end. */

@@ -155,13 +155,22 @@ export function putSignals(sheet: Sheet, controller: ControllerSpec): void {
   }
   const turbo = controller.signals.turbo_speed;
   putSignal(sheet, TURBO_SPEED, turbo, controller.guardStep);
-  const rate = turbo?.fault.rateAbove;
+  const gain = mostTurboGain(turbo);
   putDerived(
     sheet,
     "turboSpeedGainPerStepRpm",
-    Math.min(rate?.value ?? Number.POSITIVE_INFINITY, MOST_TURBO_GAIN_RPM_PER_S) * controller.guardStep.value,
+    gain.value * controller.guardStep.value,
     `rpm per step of ${controller.guardStep.written}`,
     LIMITS.speed,
-    rate !== undefined && rate.value < MOST_TURBO_GAIN_RPM_PER_S ? rate : undefined,
+    gain.from,
   );
+}
+
+/** Fastest assumed gain, rpm/s, and where it comes from. */
+function mostTurboGain(turbo: SignalSpec | undefined) {
+  const rate = turbo?.fault.rateAbove;
+  if (rate !== undefined && rate.value < MOST_TURBO_GAIN_RPM_PER_S) return { value: rate.value, from: rate };
+  const from =
+    turbo === undefined ? undefined : { written: `${MOST_TURBO_GAIN_RPM_PER_S} rpm/s`, at: turbo.at };
+  return { value: MOST_TURBO_GAIN_RPM_PER_S, from };
 }

@@ -53,7 +53,7 @@
 
 /* ---- 2 helpers and constants: comparisons, not fminf or fmaxf, so NaN and -0 act alike everywhere --- */
 #define STEP_S (0x1.47ae14p-7f) /* 0.01 s */
-#define LEAST_BOOST_HYSTERESIS_KPA (2.0f) /* 2; How far the target must fall below the least boost before no boost is wanted any more, kPa. */
+#define LEAST_BOOST_HYSTERESIS_KPA (2.0f) /* 2; Fall below the least boost that ends it, kPa. */
 
 static float min_of(float a, float b)
 {

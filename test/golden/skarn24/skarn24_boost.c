@@ -57,7 +57,7 @@
 #define LONGEST_GAP_STEPS (1000000) /* 1000000; Steps without a sample are counted up to here. */
 #define STEP_S (0x1.47ae14p-8f) /* 0.005 s */
 #define LEAST_GAUGE_KPA (25.0f) /* 25; Smallest gauge target that the gain schedule divides by, kPa. */
-#define LEAST_BOOST_HYSTERESIS_KPA (2.0f) /* 2; How far the target must fall below the least boost before no boost is wanted any more, kPa. */
+#define LEAST_BOOST_HYSTERESIS_KPA (2.0f) /* 2; Fall below the least boost that ends it, kPa. */
 #define GUARD_STEP_S (0x1.0624dep-10f) /* 0.001 s */
 
 static bool is_finite(float x)
