@@ -1,5 +1,11 @@
-import type { Calibration, Exchange, FastState, SlowState, Structure } from "../../runtime/index.ts";
-import type { SignalState } from "../../runtime/plausibility.ts";
+import { type Calibration, initialise, type Structure } from "../../runtime/index.ts";
+import {
+  newExchange,
+  newFastOutput,
+  newFastState,
+  newSlowOutput,
+  newSlowState,
+} from "../../verification/controllers/runtime-memory.ts";
 
 /** A complete structure: constant gains on the opening, every guard on; tests replace what they look at. */
 export const STRUCTURE: Structure = {
@@ -126,115 +132,17 @@ export const CALIBRATION: Calibration = {
   failSafeTorqueRatio: 0.4,
 };
 
-const signalState = (): SignalState => ({
-  lastGood: 0,
-  hasGood: false,
-  suspect: false,
-  failed: false,
-  suspectSteps: 0,
-  goodSteps: 0,
-});
-const rateState = () => ({ anchor: 0, age: 0, primed: false });
-const stuckState = () => ({ lastRaw: 0, companionAnchor: 0, sameSteps: 0 });
-const filterState = () => ({ value: 0, primed: false });
-
-export function slowState(): SlowState {
-  return {
-    measured: {
-      engineSpeedRpm: 0,
-      acceleratorRatio: 0,
-      boostPressureKpa: 0,
-      ambientPressureKpa: 0,
-      lowestAmbientKpa: 0,
-      chargeTemperatureK: 0,
-      boostCeilingRequestKpa: 0,
-    },
-    engineSpeed: signalState(),
-    engineSpeedRate: rateState(),
-    engineSpeedFilter: filterState(),
-    accelerator: signalState(),
-    acceleratorRate: rateState(),
-    acceleratorFilter: filterState(),
-    boostPressure: signalState(),
-    boostPressureRate: rateState(),
-    boostPressureStuck: stuckState(),
-    boostPressureFilter: filterState(),
-    ambientPressure: signalState(),
-    ambientPressureRate: rateState(),
-    ambientPressureFilter: filterState(),
-    chargeTemperature: signalState(),
-    chargeTemperatureRate: rateState(),
-    chargeTemperatureFilter: filterState(),
-    boostCeilingRequest: signalState(),
-    boostCeilingRequestRate: rateState(),
-    boostCeilingRequestFilter: filterState(),
-    mode: "start",
-    targetKpa: 0,
-    boostWanted: false,
-    integralTerm: 0,
-    previousPressureKpa: 0,
-    pressureRateKpaPerS: 0,
-    openingRatio: 1,
-  };
+/** Memory as after power-on. */
+function memory() {
+  const slow = newSlowState();
+  const fast = newFastState(STRUCTURE.accelerationSteps);
+  const shared = newExchange();
+  initialise(STRUCTURE, CALIBRATION, slow, fast, shared);
+  return { slow, fast, shared };
 }
 
-export function fastState(): FastState {
-  return {
-    turboSpeed: signalState(),
-    turboSpeedRate: rateState(),
-    turboSpeedStuck: stuckState(),
-    turboSpeedFilter: filterState(),
-    suspectGainRpm: 0,
-    speedHistoryRpm: new Array<number>(50).fill(0),
-    speedHistoryNext: 0,
-    speedHistoryFilled: false,
-    guardIntegralTerm: 0,
-    targetReductionKpa: 0,
-    tripped: false,
-    aboveCeilingSteps: 0,
-    belowReleaseSteps: 0,
-    trippedSteps: 0,
-  };
-}
-
-export function exchange(): Exchange {
-  return {
-    wantedOpeningRatio: 1,
-    failSafe: false,
-    guardBase: 0,
-    acceleratorRatio: 0,
-    boostPressureKpa: 0,
-    guardFloor: 0,
-    guardActive: false,
-    tripped: false,
-    targetReductionKpa: 0,
-    turboSpeedReady: false,
-    turboSpeedFailed: false,
-  };
-}
-
-export const slowOutput = () => ({
-  boostWantedKpa: 0,
-  boostTargetKpa: 0,
-  mode: "start" as const,
-  feedforwardTerm: 0,
-  proportionalTerm: 0,
-  integralTerm: 0,
-  derivativeTerm: 0,
-  wantedOpeningRatio: 0,
-  engineSpeedFailed: false,
-  acceleratorFailed: false,
-  boostPressureFailed: false,
-  ambientPressureFailed: false,
-});
-
-export const fastOutput = () => ({
-  wastegateCommandRatio: 0,
-  torqueLimitRatio: 0,
-  overLimit: false,
-  guardActive: false,
-  failSafe: false,
-  guardFloor: 0,
-  turboSpeedSuspect: false,
-  turboSpeedFailed: false,
-});
+export const slowState = () => memory().slow;
+export const fastState = () => memory().fast;
+export const exchange = () => memory().shared;
+export const slowOutput = newSlowOutput;
+export const fastOutput = newFastOutput;
