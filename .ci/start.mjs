@@ -18,7 +18,7 @@ prepare();
 
 const begun = performance.now();
 // fewer runs than the 1000 that verify makes by itself: the whole tour stays within a minute or so
-const files = ["--runs", "300", "--evidence", `${OUT}-evidence.json`, "--report", REPORT];
+const files = ["--runs", "500", "--evidence", `${OUT}-evidence.json`, "--report", REPORT];
 step("check", SPEC);
 step("generate", SPEC, "--out", OUT);
 if (spawnSync("gcc", ["--version"], { stdio: "ignore" }).status === 0) {
