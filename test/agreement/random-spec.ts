@@ -1,3 +1,4 @@
+// Longer than most files: a generator that covers every structural choice of the spec reads best in one piece.
 import fc from "fast-check";
 
 // Valid specs that cover every structural choice: reference, coordinate, schedule, gains as numbers and curves,
